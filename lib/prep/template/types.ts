@@ -1,5 +1,8 @@
 import type { BrakeSchedule, TractionMotors } from "@/lib/moves/vocabulary";
-import type { PrepGroup, PrepPhase, PrepSource } from "../vocabulary";
+import type { PrepGroup, PrepPhase } from "../vocabulary";
+
+/** "common practice" marks a row for which no published source was read. */
+export type PrepSource = "published" | "common practice";
 
 /** What is known about a unit when its checklist is made; null or absent means nobody has looked yet. */
 export type PrepFacts = {

@@ -1,0 +1,103 @@
+import { proof } from "./proof";
+import type { PrepTemplateItem } from "./types";
+
+/**
+ * What waits for the carrier's engine, in the order of the work. A9 and A14 belong to this story: A9 reads the gauges, A14 left the hand brake on.
+ * That equipment under a blue signal is not coupled to is 49 CFR 218.23(a), from memory.
+ */
+export const COUPLING: readonly PrepTemplateItem[] = [
+  {
+    id: "C1",
+    group: "when-coupled",
+    phase: "when-coupled",
+    order: 10,
+    action:
+      "When the carrier asks for the unit: everybody clear, then the workers' blue signals come down, each by the group that placed it. Agree with the crew what protects people while hoses are coupled.",
+    why: "Equipment under a blue signal may not be coupled to or moved, so the protection changes hands before the engine comes.",
+    caution: "Count people, not tools. From here until the carrier's protection is in force nobody goes between. The hand brake stays on and the chocks stay in.",
+    evidence: proof("", { label: "Carrier's person agreed with, and time" }),
+    restore: {
+      action: "Put blue-signal protection up again where the unit now stands, before any work that undoes the preparation.",
+      caution: "Nobody goes on, under or between before it is up.",
+    },
+    source: "common practice",
+    appliesWhen: [],
+    when: "On every unit, at pickup.",
+  },
+  {
+    id: "C2",
+    group: "when-coupled",
+    phase: "when-coupled",
+    order: 20,
+    action: "With the carrier's engine coupled and stretched, couple the brake-pipe hose only, then open the angle cocks between the engine and the unit, slowly. The angle cock at the far end stays as the crew needs it.",
+    why: "A dead unit is braked from the brake pipe like a car; its multiple-unit air hoses stay uncoupled.",
+    caution: "Stored air: a hose under pressure whips. Go between only at the crew's word and under the carrier's protection. Read each cock by its stencil or tag, not by where its handle points.",
+    evidence: proof("P"),
+    restore: null,
+    source: "common practice",
+    appliesWhen: [],
+    when: "On every unit, at pickup.",
+  },
+  {
+    id: "C3",
+    group: "when-coupled",
+    phase: "when-coupled",
+    order: 30,
+    action: "Let the brake pipe charge and read its pressure at the unit.",
+    why: "The unit's own reservoir fills through the dead-engine device; without that its cylinders have nothing to work with.",
+    caution: "Keep away from drains, cocks and rigging while the pressure rises; a part left open blows, and shoes can move.",
+    evidence: proof("", { label: "Brake-pipe pressure at the unit", unit: "psi" }),
+    restore: null,
+    source: "common practice",
+    appliesWhen: [],
+    when: "On every unit, at pickup.",
+  },
+  {
+    id: "C4",
+    group: "when-coupled",
+    phase: "when-coupled",
+    order: 50,
+    action: "Walk the unit through a reduction and a release: every shoe against its wheel when set, every shoe clear when released.",
+    why: "One truck cut out or one cylinder that stays applied does not show on the engine's gauge; it shows at the wheel.",
+    caution: "Pinch: no hand near shoes, levers or pistons. The crew moves air only when everyone who walks has answered.",
+    evidence: proof("P", { label: "Set and release seen by" }),
+    restore: null,
+    source: "common practice",
+    appliesWhen: [],
+    when: "On every unit, at pickup.",
+  },
+  {
+    id: "C5",
+    group: "when-coupled",
+    phase: "when-coupled",
+    order: 60,
+    action: "Release the hand brake that A14 left applied; see the chain slack and the shoes clear of the wheels, and photograph the slack chain.",
+    why: "A brake left on, or partly on, slides wheels flat, and wayside detectors may not notice it.",
+    caution: "Roll-away: release it only with the carrier's engine coupled and the air brake seen to work. Stand clear of a spinning wheel or lever.",
+    evidence: proof("P", { label: "Slack seen by" }),
+    restore: {
+      action: "Apply the hand brake and prove it before the crew uncouples.",
+      caution: "Roll-away: nothing else holds the unit once the engine and its air are gone.",
+    },
+    source: "published",
+    appliesWhen: [],
+    when: "On every unit, at pickup.",
+  },
+  {
+    id: "C6",
+    group: "when-coupled",
+    phase: "when-coupled",
+    order: 70,
+    action: "Take the chocks away, and any blue signal put up for the coupling itself; each by those who placed it. Count the chocks against S3.",
+    why: "A forgotten chock can derail the unit on its first turn of a wheel; a signal taken down by others leaves people unprotected.",
+    caution: "Ask the crew to hold still while a hand is at a wheel. Nobody takes down a signal that another group placed.",
+    evidence: proof("P", { label: "Chocks taken away, number" }),
+    restore: {
+      action: "Chock a wheel on both sides before the crew uncouples.",
+      caution: "Keep hands and feet clear of the tread until the unit has stopped and the crew has answered.",
+    },
+    source: "common practice",
+    appliesWhen: [],
+    when: "On every unit, last at pickup.",
+  },
+];
