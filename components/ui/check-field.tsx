@@ -13,7 +13,7 @@ export function CheckField({ label, hint, error, required, className, ...props }
         <input {...props} {...described} type="checkbox" required={required} className="pick" />
         <span className="pt-px">
           {label}
-          {required && <RequiredMark />}
+          {required && <RequiredMark afterSentence />}
         </span>
       </label>
       {hint && (

@@ -27,10 +27,10 @@ export function describeField({ id, name, hint, error }: Pick<FieldProps, "id" |
 }
 
 /** The word beside the label of a field that must be filled; the control itself says so to a screen reader. */
-export function RequiredMark() {
+export function RequiredMark({ afterSentence = false }: { afterSentence?: boolean }) {
   return (
     <span aria-hidden="true" className="text-ink-3">
-      , required
+      {afterSentence ? " (required)" : ", required"}
     </span>
   );
 }

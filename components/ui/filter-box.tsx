@@ -2,7 +2,7 @@ import { clsx } from "clsx";
 import { type ComponentProps, type ReactNode } from "react";
 import { Options, type SelectFieldProps } from "./select-field";
 
-const CONTROL = "block w-full min-w-0 border-0 bg-transparent px-3.5 pt-6 pb-2 text-15 text-ink outline-offset-[-3px] placeholder:text-ink-3 max-sm:pt-8";
+const CONTROL = "filter-box";
 
 /** Filters as boxes of the same form, standing on the table that they filter. */
 export function FilterBar({ children, className }: { children: ReactNode; className?: string }) {
