@@ -1,6 +1,9 @@
-import { spawn, type ChildProcess, type SpawnOptions } from "node:child_process";
+import { spawn, type SpawnOptions } from "node:child_process";
 import { openSync, closeSync, readFileSync } from "node:fs";
 import { setTimeout as sleep } from "node:timers/promises";
+
+const KILL_MILLISECONDS = 5_000;
+const started = new Set<number>();
 
 /** Whether a process with this id exists. One of another user counts as well. */
 export function isAlive(pid: number): boolean {
@@ -21,13 +24,29 @@ export function commandLine(pid: number): string | null {
   }
 }
 
-/** Asks a process to stop and waits; after the time it is killed, and the answer is false. */
-export async function stopProcess(pid: number, milliseconds: number): Promise<boolean> {
+/** When a process began, counted since the machine was switched on: tells it from a later one with the same id. */
+export function beganAt(pid: number): number | null {
+  try {
+    const stat = readFileSync(`/proc/${pid}/stat`, "utf8");
+    // The name in brackets may hold spaces; the 22nd field of all is the 20th behind it.
+    return Number(stat.slice(stat.lastIndexOf(")") + 2).split(" ")[19]);
+  } catch {
+    return null;
+  }
+}
+
+/** Asks a program that we started to stop and waits; after the time it is killed with all that it started itself. */
+export async function stopProcess(pid: number, milliseconds: number): Promise<void> {
   signal(pid, "SIGTERM");
-  if (await goneWithin(pid, milliseconds)) return true;
-  signal(pid, "SIGKILL");
-  await goneWithin(pid, 5_000);
-  return false;
+  await goneWithin(pid, milliseconds);
+  // Each program leads a group of its own, which outlives it when it left something behind.
+  signal(-pid, "SIGKILL");
+  await goneWithin(pid, KILL_MILLISECONDS);
+}
+
+/** Stops what startProgram started and is still running, such as a build that was interrupted. */
+export async function stopAllPrograms(): Promise<void> {
+  await Promise.all([...started].map((pid) => stopProcess(pid, KILL_MILLISECONDS)));
 }
 
 async function goneWithin(pid: number, milliseconds: number): Promise<boolean> {
@@ -52,8 +71,8 @@ function signal(pid: number, name: NodeJS.Signals): void {
   }
 }
 
-/** A started program: its process, and a promise of how it ended. */
-export type Running = { child: ChildProcess; pid: number; ended: Promise<number> };
+/** A started program: its process id, and a promise of the code it ended with. */
+export type Running = { pid: number; ended: Promise<number> };
 
 /**
  * Starts a program with its output in a file. It gets a session of its own, so that Ctrl-C in the terminal reaches
@@ -63,10 +82,19 @@ export function startProgram(command: string, args: string[], log: string, optio
   const file = openSync(log, "a", 0o600);
   const child = spawn(command, args, { ...options, detached: true, stdio: ["ignore", file, file] });
   closeSync(file);
-  const ended = new Promise<number>((resolve) => child.once("exit", (code) => resolve(code ?? 1)));
+  const pid = child.pid ?? 0;
+  const ended = new Promise<number>((resolve) =>
+    child.once("exit", (code) => {
+      started.delete(pid);
+      resolve(code ?? 1);
+    }),
+  );
   return new Promise((resolve, reject) => {
     child.once("error", reject);
-    child.once("spawn", () => resolve({ child, pid: child.pid ?? 0, ended }));
+    child.once("spawn", () => {
+      started.add(pid);
+      resolve({ pid, ended });
+    });
   });
 }
 
