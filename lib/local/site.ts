@@ -15,7 +15,6 @@ import { step } from "./progress";
 import { Refused } from "./refused";
 import { startScript, startServer, startWorker } from "./server-program";
 import { requireSafeDatabase } from "./server-variables";
-import { startStandIns } from "./stand-ins";
 
 /** Where one copy of the site lives: its program, its data, its ports and its build. */
 export type SitePlace = { root: string; folder: string; ports: Ports; buildFolder: string };
@@ -63,6 +62,7 @@ export async function serveSite(site: PreparedSite, parts: Parts, development: b
 
 async function startServices({ folder, ports }: SitePlace, parts: Parts, keys: Keys, appUrl: string, only: Hosted[]): Promise<Record<string, string>> {
   if (only.length === 0) return {};
+  const { startStandIns } = await import("./stand-ins");
   const services = await parts.start("The stand-ins", () => startStandIns({ folder, ports, appUrl, keys, only }));
   return services.env;
 }

@@ -4,6 +4,8 @@ import { requireNode, startMode, type StartMode } from "./arguments";
 import { readEnvFile } from "./environment";
 import { keepFolder, logFile } from "./folder";
 import { takeLock, type Lock } from "./lock";
+import { migrateDatabase } from "./migrate";
+import { MigrationFault } from "./migration-steps";
 import { DATABASE_NEEDS, ensurePackages } from "./packages";
 import { Parts } from "./parts";
 import { portsFrom, requireFreePort, START_PORTS, type Ports } from "./ports";
@@ -11,8 +13,6 @@ import { stopAllPrograms } from "./processes";
 import { say } from "./progress";
 import { Refused } from "./refused";
 import { openDatabase, prepareSite, serveSite, type SitePlace } from "./site";
-import { MigrationFault } from "./migration-steps";
-import { sayWelcome } from "./welcome";
 
 const root = process.cwd();
 const folder = join(root, ".data");
@@ -39,16 +39,21 @@ async function main(): Promise<void> {
   for (const name of Object.keys(PURPOSES) as (keyof Ports)[]) await requireFreePort(place.ports[name], PURPOSES[name]);
   await ensurePackages(DATABASE_NEEDS, logFile(folder, "packages"));
   const opened = await openDatabase(place, parts, mode === "database");
-  const site = await prepareSite(place, parts, opened, process.env);
   if (mode === "database") {
-    const urls = databaseUrls(site.keys, place.ports.database);
-    say(`\nDATABASE_URL=${urls.app}\nDATABASE_ADMIN_URL=${urls.admin}\n\nCtrl-C stops it.`);
+    await sayDatabase(databaseUrls(opened.keys, place.ports.database));
   } else {
+    const site = await prepareSite(place, parts, opened, process.env);
     await serveSite(site, parts, mode === "development");
+    const { sayWelcome } = await import("./welcome");
     sayWelcome(site);
   }
   const name = await parts.givenUp;
   throw new Refused(`${name} keeps ending; its log is in ${join(folder, "logs")}. Stopping.`);
+}
+
+async function sayDatabase({ app, admin }: { app: string; admin: string }): Promise<void> {
+  await migrateDatabase(admin, app);
+  say(`\nDATABASE_URL=${app}\nDATABASE_ADMIN_URL=${admin}\nTEST_DATABASE_ADMIN_URL=${admin}\n\nCtrl-C stops it.`);
 }
 
 function placeFor(mode: StartMode): SitePlace {
