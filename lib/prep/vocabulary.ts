@@ -1,11 +1,13 @@
-/** Uncoupled and without air, a unit is held by its hand brake and chocks alone; some work waits for the carrier's engine. */
+/** Prep happens in two phases: an uncoupled unit without air is held by hand brake and chocks alone. */
 export const PREP_PHASES = ["where-it-stands", "when-coupled"] as const;
 export type PrepPhase = (typeof PREP_PHASES)[number];
 
-/** The order of the groups on a printed checklist. */
-export const PREP_GROUPS = ["protection", "air-brakes", "electrical", "power-plant", "running-gear", "draft", "body", "papers", "coupling"] as const;
+export const PREP_GROUPS = ["safety", "power-plant", "electrical", "air-brakes", "running-gear", "draft", "body", "papers", "when-coupled"] as const;
 export type PrepGroup = (typeof PREP_GROUPS)[number];
 
-/** "common practice" marks a row for which no published source was read. */
-export const PREP_SOURCES = ["published", "common practice"] as const;
-export type PrepSource = (typeof PREP_SOURCES)[number];
+export const PREP_STATES = ["to-do", "done", "not-applicable"] as const;
+export type PrepState = (typeof PREP_STATES)[number];
+
+/** `none`: nothing to undo. `later`: not yet disturbed or the unit has not arrived. `kept` needs the receiver's word. */
+export const RESTORE_STATES = ["none", "later", "to-restore", "restored", "kept"] as const;
+export type RestoreState = (typeof RESTORE_STATES)[number];
