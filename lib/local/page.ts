@@ -23,6 +23,7 @@ a{color:var(--link)}
 .row strong{display:block}
 small,.hint{color:var(--ink2);font-size:14px}
 .hint{margin:8px 0}
+h2.hint{margin:0}
 dl{display:grid;grid-template-columns:max-content 1fr;gap:4px 14px}
 dt{color:var(--ink2)}
 dd{margin:0}
