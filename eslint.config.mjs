@@ -6,7 +6,7 @@ import jsxA11y from "eslint-plugin-jsx-a11y";
 const PROCESS_MODULES = ["child_process", "node:child_process"];
 
 export default defineConfig([
-  globalIgnores([".next/**", ".next-test/**", ".next-dev/**", ".data/**", ".test/**", "next-env.d.ts", "db/migrations/**"]),
+  globalIgnores([".next*/**", ".data/**", ".test/**", "next-env.d.ts", "db/migrations/**"]),
   ...nextVitals,
   ...nextTypescript,
   {

@@ -10,15 +10,21 @@ type Mark = { launcher: Named; programs: Named[] };
 const STOP_MILLISECONDS = 60_000;
 
 /** Held while one launcher runs on a data folder; remembers what it started, so that a later one can tell what a killed one left. */
-export type Lock = { remember: (pids: number[]) => void; release: () => void };
+export type Lock = {
+  remember: (pids: number[]) => void;
+  release: () => void;
+  /** What had to be cleared up after a launcher that was killed, in one sentence; null when the last one stopped in order. */
+  clearedUp: string | null;
+};
 
-/** Takes the folder for this process. Refuses while another launcher runs on it, and clears up once after one that was killed. */
-export async function takeLock(folder: string, restart: string): Promise<Lock> {
+/** Takes the folder for this process. Refuses while another launcher runs on it; what a killed one left running is stopped. */
+export async function takeLock(folder: string): Promise<Lock> {
   const path = join(folder, "running.json");
-  if (existsSync(path)) await refuseOrClear(path, restart);
+  const clearedUp = existsSync(path) ? await clearUp(path) : null;
   const launcher = named(process.pid);
   create(path, { launcher, programs: [] });
   return {
+    clearedUp,
     remember: (pids) => {
       writeFileSync(`${path}.new`, JSON.stringify({ launcher, programs: pids.map(named) } satisfies Mark), { mode: 0o600 });
       renameSync(`${path}.new`, path);
@@ -27,7 +33,7 @@ export async function takeLock(folder: string, restart: string): Promise<Lock> {
   };
 }
 
-async function refuseOrClear(path: string, restart: string): Promise<never> {
+async function clearUp(path: string): Promise<string> {
   const mark = readMark(path);
   if (mark && isSame(mark.launcher)) {
     throw new Refused(`It is already running (process ${mark.launcher.pid}). Stop that one first: kill ${mark.launcher.pid}`);
@@ -37,8 +43,8 @@ async function refuseOrClear(path: string, restart: string): Promise<never> {
   for (const { pid } of left.toReversed()) await stopProcess(pid, STOP_MILLISECONDS);
   rmSync(path, { force: true });
   const who = mark ? `process ${mark.launcher.pid} is gone` : "its mark was half written";
-  const cleared = left.length > 0 ? `, and the ${left.length} programs it left running have been stopped` : "";
-  throw new Refused(`The last run was killed before it could stop in order (${who})${cleared}. All is cleared up; run ${restart} again.`);
+  const stopped = left.length > 0 ? `; what it had left running (${left.length === 1 ? "1 program" : `${left.length} programs`}) has been stopped` : "";
+  return `The last run was killed before it could stop in order (${who})${stopped}.`;
 }
 
 function readMark(path: string): Mark | null {

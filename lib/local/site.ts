@@ -40,7 +40,7 @@ export async function openDatabase({ folder, ports }: SitePlace, parts: Parts, f
 
 /** Brings the tables up to date, starts the stand-ins of the services without keys, and loads the demo into an empty database. */
 export async function prepareSite(place: SitePlace, parts: Parts, { database, keys }: { database: LocalDatabase; keys: Keys }, given: NodeJS.ProcessEnv): Promise<PreparedSite> {
-  const { folder, ports } = place;
+  const { ports } = place;
   const urls = databaseUrls(keys, ports.database);
   await step("Bringing the tables up to date", () => migrateDatabase(urls.admin, urls.app));
   const standIns = missingServices(given);

@@ -35,7 +35,9 @@ async function main(): Promise<void> {
   readEnvFile(root);
   const place = placeFor(mode);
   keepFolder(folder);
-  lock = await takeLock(folder, "npm start");
+  lock = await takeLock(folder);
+  // Somebody should know that it happened before anything is written again.
+  if (lock.clearedUp !== null) throw new Refused(`${lock.clearedUp} All is cleared up; run npm start again.`);
   for (const name of Object.keys(PURPOSES) as (keyof Ports)[]) await requireFreePort(place.ports[name], PURPOSES[name]);
   await ensurePackages(DATABASE_NEEDS, logFile(folder, "packages"));
   const opened = await openDatabase(place, parts, mode === "database");
