@@ -1,4 +1,4 @@
-import { customType, date, datetime, varchar } from "drizzle-orm/mysql-core";
+import { customType, date, datetime, text, varchar } from "drizzle-orm/mysql-core";
 
 /** Prefixed id such as `mov_0193…`; ascii and binary, so that only the very same id is equal. Wide enough for the sign-in library's own ids. */
 export const id = (name: string) => customType<{ data: string }>({ dataType: () => "varchar(64) character set ascii collate ascii_bin" })(name);
@@ -19,7 +19,7 @@ export const day = (name: string) => date(name, { mode: "string" });
 export const label = (name: string) => varchar(name, { length: 200 });
 
 /** Several lines that a person typed; the doors cap it well below this. */
-export const words = (name: string) => varchar(name, { length: 4000 });
+export const words = (name: string) => text(name);
 
 /** IANA zone of a place, such as `America/Chicago`. */
 export const zone = (name: string) => varchar(name, { length: 60 });

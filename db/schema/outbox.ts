@@ -30,7 +30,8 @@ export const attempts = mysqlTable("attempts", {
   key: varchar("key", { length: 80 }).notNull(),
   door: code("door").notNull(),
   bodyHash: sha256("body_hash").notNull(),
-  answer: jsonText<unknown>("answer").notNull(),
+  /** Null only inside the write's own transaction. */
+  answer: jsonText<unknown>("answer"),
   at: instant("at").notNull(),
 }, (t) => [primaryKey({ columns: [t.userId, t.key] }), index("attempts_at").on(t.at)]);
 
