@@ -87,7 +87,7 @@ export async function seedMove(given: { prepDone?: boolean } = {}): Promise<Seed
     id: moveId, caseNumber: `99-${moveId.slice(-6)}`, ownerCompanyId: own, originName: "Sand Hollow elevator", originPlace: "Sand Hollow", originZone: "America/Chicago",
     destinationName: "Vellum Ridge shops", destinationPlace: "Quill Creek", destinationZone: "America/Denver", searchText: "zvrx 2783 sand hollow quill creek", openedBy: owner.userId, openedAt: at,
   });
-  await db().insert(equipment).values({ moveId, mark: "ZVRX", number: "2783", fEnd: "short-hood", shape: "hood", axles: 6, weightLb: 362_400, brakeSchedule: "26-L", bearings: "roller-sealed", alignment: "alignment-control", facts: {} });
+  await db().insert(equipment).values({ moveId, mark: "ZVRX", number: "2783", fEnd: "short-hood", shape: "hood", axles: 6, weightLb: 362_400, brakeSchedule: "26-L", bearings: "roller-rotating-cap", alignment: "alignment-control", facts: {} });
   await db().insert(legs).values([
     { id: legA, moveId, seq: 1, carrierName: "Quillan & Sandbar", carrierMark: "ZQSR", carrierCompanyId: carA, fromPlace: "Sand Hollow", fromZone: "America/Chicago", toPlace: "Ardell", toZone: "America/Denver", payerName: "Fenn Valley Fund", payerCompanyId: pay },
     { id: legB, moveId, seq: 2, carrierName: "Sable Mountain Lines", carrierMark: "ZSML", carrierCompanyId: carB, fromPlace: "Ardell", fromZone: "America/Denver", toPlace: "Quill Creek", toZone: "America/Denver", payerName: "Vellum Ridge Heritage Line", payerCompanyId: own },
