@@ -4,10 +4,14 @@ import { asVariables, PALETTES, PRINT_PALETTE, TOKENS } from "./components/ui/pa
 
 const colors = Object.fromEntries(TOKENS.map((token) => [token, `var(--${token})`]));
 
+function forced(token: string): string {
+  if (/^(card|sheet|manila|bar|band|photo-plate)$|^on-|-wash$/.test(token)) return "Canvas";
+  if (token === "tie") return "GrayText";
+  return token === "focus" ? "Highlight" : "CanvasText";
+}
+
 /** Windows and other systems with colours forced by their user: every token falls back to a system colour, drawings included. */
-const FORCED = Object.fromEntries(
-  TOKENS.map((token) => [`--${token}`, /^(card|sheet|manila|bar|on-|photo-plate)|-wash$|^band$/.test(token) ? "Canvas" : token === "focus" ? "Highlight" : "CanvasText"]),
-);
+const FORCED = Object.fromEntries(TOKENS.map((token) => [`--${token}`, forced(token)]));
 
 const palettes = plugin(({ addBase }) => {
   addBase({ ":root": asVariables(PALETTES.light) });

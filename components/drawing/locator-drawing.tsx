@@ -4,18 +4,18 @@ import { UNIT_BOX, UnitShape } from "./unit-shape";
 
 const { width, left, scale, sideTop, topY, topHeight } = LOCATOR;
 const BODY_WIDTH = UNIT_BOX.width * scale;
-const SIDE_LABELS_Y = sideTop + UNIT_BOX.height * scale + 15;
+const SIDE_LABELS_Y = sideTop + UNIT_BOX.height * scale + 18;
 
 function Wheels({ form }: { form: UnitForm }) {
   return (
-    <g textAnchor="middle" className="fill-ink text-[14px] font-[540] [font-stretch:80%]">
+    <g textAnchor="middle" className="fill-ink text-[16px] font-[540] [font-stretch:72%]">
       {axleXs(form).map((x, at) => (
         <g key={x}>
           <rect x={x - 7} y={topY - 7} width="14" height="6" className="fill-card stroke-rule-strong" />
           <rect x={x - 7} y={topY + topHeight + 1} width="14" height="6" className="fill-card stroke-rule-strong" />
           <text x={x} y={SIDE_LABELS_Y}>{`L${at + 1}`}</text>
-          <text x={x} y={topY - 12}>{`R${at + 1}`}</text>
-          <text x={x} y={topY + topHeight + 21}>{`L${at + 1}`}</text>
+          <text x={x} y={topY - 15}>{`R${at + 1}`}</text>
+          <text x={x} y={topY + topHeight + 24}>{`L${at + 1}`}</text>
         </g>
       ))}
     </g>
@@ -42,8 +42,8 @@ function Ring({ x, y, tone }: { x: number; y: number; tone: "oxide" | "verdigris
   const stroke = { oxide: "stroke-oxide", verdigris: "stroke-verdigris", ink: "stroke-ink" }[tone];
   return (
     <g fill="none">
-      <circle cx={x} cy={y} r="13" strokeWidth="6" className="stroke-sheet" />
-      <circle cx={x} cy={y} r="13" strokeWidth="3" className={stroke} />
+      <circle cx={x} cy={y} r="12" strokeWidth="6" className="stroke-sheet" />
+      <circle cx={x} cy={y} r="12" strokeWidth="3" className={stroke} />
     </g>
   );
 }
@@ -65,7 +65,7 @@ export function LocatorDrawing({ form, rings }: { form: UnitForm; rings: readonl
           F
         </text>
       </g>
-      <g className="fill-ink-2 text-[14px] [font-stretch:80%]">
+      <g className="fill-ink-2 text-[15px] [font-stretch:74%]">
         <text x={width - 1} y={SIDE_LABELS_Y} textAnchor="end">
           rear
         </text>

@@ -10,7 +10,7 @@ export function Locator({ form, rings, className }: LocatorProps) {
   const names = rings.map(({ placeId }) => placeName(placeId, form.axles)).filter((name) => name !== null);
   const label = names.length > 0 ? `Outline of the unit. Marked: ${names.join("; ")}.` : "Outline of the unit.";
   return (
-    <svg role="img" aria-label={label} viewBox={`0 0 ${LOCATOR.width} ${LOCATOR.height}`} className={clsx("block h-auto w-full max-w-[540px]", className)}>
+    <svg role="img" aria-label={label} viewBox={`0 0 ${LOCATOR.width} ${LOCATOR.height}`} className={clsx("block h-auto w-full max-w-[460px]", className)}>
       <LocatorDrawing form={form} rings={rings} />
     </svg>
   );

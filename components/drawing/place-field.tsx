@@ -32,7 +32,7 @@ export function PlaceField({ form, value, onChange, ...field }: PlaceFieldProps)
   return (
     <div>
       {/* The list below is the same choice for a keyboard and a screen reader. */}
-      <svg aria-hidden="true" viewBox={`0 0 ${LOCATOR.width} ${LOCATOR.height}`} onClick={touch} className="mb-3 block h-auto w-full max-w-[540px] cursor-crosshair touch-manipulation">
+      <svg aria-hidden="true" viewBox={`0 0 ${LOCATOR.width} ${LOCATOR.height}`} onClick={touch} className="mb-3 block h-auto w-full max-w-[460px] cursor-crosshair touch-manipulation">
         <LocatorDrawing form={form} rings={value ? [{ placeId: value, tone: "ink" }] : []} />
       </svg>
       <SelectField blank="Touch the drawing or choose here" {...field} value={value} onChange={(event) => onChange(event.target.value)} choices={grouped(placesOn(form))} />

@@ -2,7 +2,7 @@ import { cabLeads, placesOn, type UnitForm } from "@/lib/moves/places";
 import { AXLE_POINTS, UNIT_BOX, WHEEL } from "./unit-shape";
 
 /** The locator's sheet: the side above, the top below, the end marked F always at the left. */
-export const LOCATOR = { width: 360, height: 226, scale: 1.35, left: 18, sideTop: 8, topY: 148, topHeight: 44 } as const;
+export const LOCATOR = { width: 360, height: 230, scale: 1.35, left: 18, sideTop: 8, topY: 152, topHeight: 44 } as const;
 
 export type Point = { x: number; y: number };
 
@@ -16,8 +16,8 @@ export function axleXs({ axles, fEnd }: UnitForm): number[] {
 }
 
 const MIDDLE_Y = LOCATOR.topY + LOCATOR.topHeight / 2;
-const RIGHT_Y = LOCATOR.topY - 4;
-const LEFT_Y = LOCATOR.topY + LOCATOR.topHeight + 4;
+const RIGHT_Y = LOCATOR.topY + 2;
+const LEFT_Y = LOCATOR.topY + LOCATOR.topHeight - 2;
 
 /** Places that keep to the F end and its opposite, whatever the body looks like. */
 function endPoints(form: UnitForm): Record<string, Point> {

@@ -15,7 +15,7 @@ const NOTE_TONES: Record<HandoverTone, string> = {
 /** A stretch of track down the left edge of a station's words; the last station has none. */
 function Rail({ been }: { been: boolean }) {
   return (
-    <span aria-hidden="true" className="absolute top-0 bottom-0 left-2 w-4.5 bg-[repeating-linear-gradient(to_bottom,var(--rule)_0_5px,transparent_5px_13px)]">
+    <span aria-hidden="true" className="absolute top-0 bottom-0 left-2 w-4.5 bg-[repeating-linear-gradient(to_bottom,var(--tie)_0_5px,transparent_5px_13px)]">
       <span className={clsx("absolute inset-y-0 left-1 w-2.5 border-x-2 bg-sheet/0", been ? "border-ink" : "border-dashed border-rule-strong")} />
     </span>
   );
@@ -41,9 +41,9 @@ export function RouteStripTall({ ends, handovers, position, unit }: Strip) {
   const atStart = position <= 0.001;
   const arrived = position >= 0.999;
   const here = (
-    <Stop key="here" marker={<rect x="-8" y="-13" width="16" height="26" className="fill-ink" />}>
+    <Stop key="here" been={arrived} marker={<rect x="-8" y="-13" width="16" height="26" className="fill-ink" />}>
       <UnitOutline {...unit} className="mb-1 max-w-36" />
-      <span className="font-[620]">{arrived ? "The unit stands here." : atStart ? "The unit stands here." : "The unit is on this stretch."}</span>
+      <span className="font-[620]">{arrived || atStart ? "The unit stands here." : "The unit is on this stretch."}</span>
     </Stop>
   );
   return (

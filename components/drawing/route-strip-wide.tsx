@@ -4,8 +4,6 @@ import { Diamond } from "./diamond";
 import { COLUMNS, handoverAt, labelColumns, type Handover, type HandoverTone, type Strip } from "./strip";
 import { UNIT_BOX, UnitShape } from "./unit-shape";
 
-const UNIT_SCALE = 0.62;
-const UNIT_WIDTH = UNIT_BOX.width * UNIT_SCALE;
 const RAIL_Y = 66;
 const TRACK_Y = RAIL_Y + 3;
 const CLEAR = 10;
@@ -19,12 +17,17 @@ const NOTE_TONES: Record<HandoverTone, string> = {
 
 const percent = (part: number) => `${Math.round(part * 10_000) / 100}%`;
 
-/** The words over a stretch keep clear of the unit that stands on it. */
-function legPoint(index: number, count: number, position: number): number {
+/** How much of the strip the unit covers, at most. */
+const UNIT_SHARE = 0.22;
+
+/** The words over a stretch stand in the middle of its longer part that the unit leaves free; null when it leaves none. */
+function legPoint(index: number, count: number, position: number): number | null {
   const start = handoverAt(index, count);
   const end = index === count - 1 ? 1 : handoverAt(index + 1, count);
-  if (position <= start || position >= end) return (start + end) / 2;
-  return position - start > end - position ? (start + position - 0.08) / 2 : (position + 0.08 + end) / 2;
+  const before = [start, Math.min(end, position * (1 - UNIT_SHARE))] as const;
+  const after = [Math.max(start, position + UNIT_SHARE * (1 - position)), end] as const;
+  const [from, to] = before[1] - before[0] > after[1] - after[0] ? before : after;
+  return to - from > 0.08 ? (from + to) / 2 : null;
 }
 
 function Rails({ from, to, broken }: { from: string; to: string; broken?: boolean }) {
@@ -39,21 +42,23 @@ function Rails({ from, to, broken }: { from: string; to: string; broken?: boolea
 function Track({ handovers, position, unit }: Strip) {
   const count = handovers.length;
   const at = Math.min(1, Math.max(0, position));
+  const scale = count < 2 ? 0.68 : 0.58;
+  const width = UNIT_BOX.width * scale;
   // The unit keeps inside both ends: at 0 it stands right of the first, at 1 left of the last.
-  const shift = CLEAR - (UNIT_WIDTH + 2 * CLEAR) * at;
+  const shift = CLEAR - (width + 2 * CLEAR) * at;
+  const front = shift + width;
   return (
     <svg aria-hidden="true" width="100%" height="92" overflow="visible" className="block">
-      <line x1="0" x2="100%" y1={TRACK_Y} y2={TRACK_Y} strokeWidth="14" strokeDasharray="5 9" className="stroke-rule" />
+      <line x1="0" x2="100%" y1={TRACK_Y} y2={TRACK_Y} strokeWidth="14" strokeDasharray="5 9" className="stroke-tie" />
       <Rails from="0" to="100%" broken />
-      <line x1="0" x2={percent(at)} y1={TRACK_Y} y2={TRACK_Y} strokeWidth="9" strokeDasharray="none" className="stroke-sheet" />
-      <line x1="0" x2={percent(at)} y1={TRACK_Y} y2={TRACK_Y} strokeWidth="14" strokeDasharray="5 9" className="stroke-rule" />
       <Rails from="0" to={percent(at)} />
       <g strokeWidth="3">
         <line x1="0" x2="0" y1="50" y2="88" className="stroke-ink" />
         <line x1="100%" x2="100%" y1="50" y2="88" className={at >= 0.999 ? "stroke-ink" : "stroke-rule-strong"} />
       </g>
       <svg x={percent(at)} overflow="visible">
-        <g transform={`translate(${shift} ${RAIL_Y - UNIT_BOX.height * UNIT_SCALE}) scale(${UNIT_SCALE})`}>
+        {front > 0 && <Rails from="-1" to={`${front}`} />}
+        <g transform={`translate(${shift} ${RAIL_Y - UNIT_BOX.height * scale}) scale(${scale})`}>
           <UnitShape {...unit} />
         </g>
       </svg>
@@ -89,7 +94,10 @@ function Words({ handover: { carrier, place, note, tone, href } }: { handover: H
 export function RouteStripWide(strip: Strip) {
   const { ends, handovers, position } = strip;
   const count = handovers.length;
-  const legs = handovers.map((handover, index) => ({ ...handover, at: legPoint(index, count, position) })).filter((handover) => handover.leg);
+  const legs = handovers.flatMap(({ id, leg }, index) => {
+    const at = legPoint(index, count, position);
+    return leg && at !== null ? [{ id, leg, at }] : [];
+  });
   return (
     <>
       <div className="relative">

@@ -6,7 +6,7 @@ export type BoxSpan = 2 | 3 | 4 | 6 | 8 | 12;
 
 const SPANS: Record<BoxSpan, string> = {
   2: "col-span-6 @lg:col-span-4 @3xl:col-span-2",
-  3: "col-span-6 @3xl:col-span-3",
+  3: "col-span-6 @lg:col-span-6 @3xl:col-span-3",
   4: "col-span-12 @lg:col-span-4",
   6: "col-span-12 @lg:col-span-6",
   8: "col-span-12 @lg:col-span-8",

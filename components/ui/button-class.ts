@@ -10,7 +10,7 @@ const VARIANTS: Record<ButtonVariant, string> = {
 };
 
 const SIZES: Record<ButtonSize, string> = {
-  small: "min-h-9 px-3 text-14 pointer-coarse:min-h-11",
+  small: "min-h-9 px-3 text-14 max-sm:min-h-11 pointer-coarse:min-h-11",
   regular: "min-h-11 px-4 text-15",
   large: "min-h-13 px-5 text-17",
 };
