@@ -1,7 +1,7 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { type Tab } from "./tabs";
+import { type Tab } from "./tab";
 
 /** The same tabs as one native select; choosing a line goes there. */
 export function TabSelect({ label, tabs }: { label: string; tabs: readonly Tab[] }) {

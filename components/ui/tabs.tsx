@@ -1,14 +1,7 @@
 import { clsx } from "clsx";
 import Link from "next/link";
+import { type Tab } from "./tab";
 import { TabSelect } from "./tab-select";
-
-export type Tab = {
-  href: string;
-  label: string;
-  /** How many things wait in there; nothing is shown for null or zero. */
-  count?: number | null;
-  current?: boolean;
-};
 
 /** The parts of one thing as folder tabs; on a phone one native select. Stands directly on the sheet that it belongs to. */
 export function Tabs({ label, tabs, className }: { label: string; tabs: readonly Tab[]; className?: string }) {
