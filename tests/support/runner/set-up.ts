@@ -37,7 +37,7 @@ export async function openRun(place: SitePlace, steps: StepName[]): Promise<Test
     for (const name of Object.keys(ports) as (keyof Ports)[]) await requireFreePort(ports[name], "the tests");
     await ensurePackages(BROWSER_NEEDS, logFile(folder, "packages"));
   }
-  return { place, parts, lock, env: { ...process.env, NEXT_DIST_DIR: place.buildFolder, NEXT_TELEMETRY_DISABLED: "1" } };
+  return { place, parts, lock, env: { ...plain(process.env), NEXT_DIST_DIR: place.buildFolder, NEXT_TELEMETRY_DISABLED: "1" } };
 }
 
 /** Makes ready what a step needs beyond the files: a database for some, the whole running site for the browser. */
@@ -55,6 +55,11 @@ async function siteFor({ place, parts, env }: TestRun, database: Awaited<ReturnT
   const site = await prepareSite(place, parts, database, withoutServices(env));
   await serveSite(site, parts, false);
   return { ...site.env, MAIL_PAGE_URL: `http://localhost:${place.ports.mailPage}` };
+}
+
+/** Logs are read as text, so no program may color its output. */
+function plain({ FORCE_COLOR: _, ...env }: NodeJS.ProcessEnv): NodeJS.ProcessEnv {
+  return { ...env, NO_COLOR: "1" } as NodeJS.ProcessEnv;
 }
 
 /** The tests never reach a hosted service, whatever the shell or a file of settings names. */
