@@ -10,7 +10,7 @@ import type { Part } from "./vocabulary";
 const companyIds = (viewer: Viewer) => viewer.memberships.map((one) => one.companyId);
 
 /** Seats that the viewer holds: those of a company that admitted them, and those they were invited to alone. */
-const heldSeat = (viewer: Viewer) =>
+export const heldSeat = (viewer: Viewer) =>
   and(
     isNull(moveSeats.removedAt),
     or(
