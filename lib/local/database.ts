@@ -1,9 +1,7 @@
-import { execFile } from "node:child_process";
-import { existsSync, mkdirSync, mkdtempSync, readFileSync, readdirSync, rmSync, statSync, writeFileSync } from "node:fs";
+import { existsSync, mkdirSync, mkdtempSync, readFileSync, readdirSync, renameSync, rmSync, statSync, writeFileSync } from "node:fs";
 import { tmpdir, userInfo } from "node:os";
 import { join } from "node:path";
 import { setTimeout as sleep } from "node:timers/promises";
-import { promisify } from "node:util";
 import mysql, { type Connection } from "mysql2/promise";
 import { databaseSettings, type DatabasePlace } from "./database-settings";
 import { requireFreePort } from "./ports";
@@ -20,7 +18,7 @@ export type LocalDatabase = {
   stop: () => Promise<void>;
 };
 
-/** Written last when the folder is made; a folder without it was interrupted half way and holds nothing of worth. */
+/** Written last when the folder is made: a folder without it is not a whole database. */
 const COMPLETE_MARK = "complete";
 /** Unix socket paths end at 107 bytes. */
 const LONGEST_SOCKET = 100;
@@ -72,7 +70,7 @@ function requireOwnFolder(folder: string): void {
     throw new Refused(`The data folder ${folder} belongs to another user of this machine (number ${owner}). Start as that user, or use another copy of the program.`);
   }
   if (!existsSync(join(folder, COMPLETE_MARK)) && readdirSync(folder).length > 0) {
-    throw new Refused(`The data folder ${folder} was only half made: an earlier first start was interrupted. It holds no data yet; remove it (rm -r ${folder}) and start again.`);
+    throw new Refused(`The data folder ${folder} is only half made: its mark "${COMPLETE_MARK}" is missing. If nothing in it is wanted, remove it (rm -r ${folder}) and start again.`);
   }
 }
 
@@ -81,21 +79,20 @@ function requireNotRunning(folder: string): void {
   if (pid !== null) throw new Refused(`A database is already running on ${folder} (process ${pid}). Stop it first: kill ${pid}`);
 }
 
+/** Made under another name, so that one that was interrupted is never taken for a database and is simply made anew. */
 async function makeDatabase(folder: string): Promise<void> {
-  mkdirSync(join(folder, "tmp"), { recursive: true, mode: 0o700 });
-  const args = ["--no-defaults", `--datadir=${join(folder, "data")}`, "--auth-root-authentication-method=socket", `--auth-root-socket-user=${userInfo().username}`, "--skip-test-db"];
+  const making = `${folder}.making`;
+  rmSync(making, { recursive: true, force: true });
+  mkdirSync(join(making, "tmp"), { recursive: true, mode: 0o700 });
+  const log = join(making, "database.log");
+  const args = ["--no-defaults", `--datadir=${join(making, "data")}`, "--auth-root-authentication-method=socket", `--auth-root-socket-user=${userInfo().username}`, "--skip-test-db"];
   if (process.getuid?.() === 0) args.push("--user=root");
-  try {
-    await promisify(execFile)("mariadb-install-db", args, { timeout: 120_000, maxBuffer: 4_000_000, cwd: folder });
-  } catch (fault) {
-    throw new Refused(`The database folder ${folder} could not be made: ${firstError(fault)}`, { cause: fault });
-  }
-  writeFileSync(join(folder, COMPLETE_MARK), "", { mode: 0o600 });
-}
-
-function firstError(fault: unknown): string {
-  const { stderr = "", message = String(fault) } = fault as { stderr?: string; message?: string };
-  return stderr.split("\n").find((line) => /error|denied|fatal/i.test(line)) ?? message.split("\n")[0] ?? "unknown";
+  const running = await startProgram("mariadb-install-db", args, log, { cwd: making });
+  if ((await running.ended) !== 0) throw new Refused(`The database folder could not be made. The end of ${log}:\n${lastLines(log, 15)}`);
+  writeFileSync(join(making, COMPLETE_MARK), "", { mode: 0o600 });
+  // An empty folder of that name would do as well as none.
+  rmSync(folder, { recursive: true, force: true });
+  renameSync(making, folder);
 }
 
 function socketOf(folder: string): { socket: string; forget: () => void } {
