@@ -70,7 +70,7 @@ type Facts = { id: string; url: string; now: number; total: number; money: strin
 
 function sessionOf(params: SessionParams, { id, url, now, total, money, expiresAt }: Facts): Stripe.Checkout.Session {
   return {
-    id, object: "checkout.session", adaptive_pricing: null, after_expiration: null, allow_promotion_codes: null, allowed_payment_method_types: null,
+    id, object: "checkout.session", adaptive_pricing: null, after_expiration: null, allow_promotion_codes: null, allowed_payment_method_types: params.allowed_payment_method_types ?? null,
     amount_subtotal: total, amount_total: total, automatic_tax: { enabled: false, liability: null, provider: null, status: null },
     billing_address_collection: null, cancel_url: params.cancel_url ?? null, client_reference_id: params.client_reference_id ?? null, client_secret: null,
     collected_information: null, consent: null, consent_collection: null, created: now, currency: money, currency_conversion: null, custom_fields: [],
@@ -78,7 +78,7 @@ function sessionOf(params: SessionParams, { id, url, now, total, money, expiresA
     customer_creation: "if_required", customer_details: null, customer_email: params.customer_email ?? null, discounts: [], expires_at: expiresAt,
     integration_identifier: null, invoice: null, invoice_creation: null, livemode: false, locale: params.locale ?? null, managed_payments: null,
     metadata: params.metadata, mode: "payment", origin_context: null, payment_intent: null, payment_link: null, payment_method_collection: "if_required",
-    payment_method_configuration_details: null, payment_method_options: {}, payment_method_types: params.payment_method_types ?? ["card"],
+    payment_method_configuration_details: null, payment_method_options: {}, payment_method_types: params.allowed_payment_method_types ?? ["card"],
     payment_status: "unpaid", permissions: null, recovered_from: null, saved_payment_method_options: null, setup_intent: null,
     shipping_address_collection: null, shipping_cost: null, shipping_options: [], status: "open", submit_type: params.submit_type ?? null,
     subscription: null, success_url: params.success_url, total_details: { amount_discount: 0, amount_shipping: 0, amount_tax: 0 },
