@@ -54,7 +54,7 @@ export const payments = mysqlTable("payments", {
   begunAt: instant("begun_at").notNull(),
   expiresAt: instant("expires_at"),
   paidAt: instant("paid_at"),
-}, (t) => [unique("payments_attempt").on(t.quoteId, t.attempt), unique("payments_session").on(t.sessionId), index("payments_state").on(t.state, t.begunAt)]);
+}, (t) => [unique("payments_attempt").on(t.quoteId, t.attempt), unique("payments_session").on(t.sessionId), index("payments_state").on(t.state, t.begunAt), index("payments_intent").on(t.intentId)]);
 
 /** Events of the payment service that were taken in; a second delivery finds its row. */
 export const paymentEvents = mysqlTable("payment_events", {
@@ -66,7 +66,7 @@ export const paymentEvents = mysqlTable("payment_events", {
   /** Set when a clerk should look: an amount that differs, money after the fact. */
   flagged: boolean("flagged").notNull().default(false),
   at: instant("at").notNull(),
-});
+}, (t) => [index("payment_events_payment").on(t.paymentId)]);
 
 /** Double entry: the postings of one group sum to zero. Never changed; a wrong one is reversed. */
 export const ledgerPostings = mysqlTable("ledger_postings", {
