@@ -15,6 +15,7 @@ export type Fault = {
 export type Faults = {
   /** The first fault of this kind that fits, counted as used; undefined when none is on order. */
   take(kind: string, fits?: (fault: Fault) => boolean): Fault | undefined;
+  isOrdered(kind: string): boolean;
   /** Answers GET and POST /faults; false when the request is for something else. */
   serve(exchange: Exchange): Promise<boolean>;
 };
@@ -30,11 +31,13 @@ export function openFaults(kinds: readonly string[]): Faults {
       faults = faults.filter((one) => one.left !== 0);
       return fault;
     },
-    async serve({ request, response, url }) {
+    isOrdered: (kind) => faults.some((one) => one.kind === kind),
+    async serve({ request, response, url, closeIdle }) {
       if (url.pathname !== "/faults") return false;
       if (request.method === "POST") faults = order(faults, kinds, await readJson(request));
       else if (request.method !== "GET") throw new Refusal(405, "GET or POST.");
-      sendJson(response, 200, { faults, kinds: [...kinds, "off"] });
+      sendJson(response, 200, { faults, kinds: [...kinds, "off"] }, { connection: "close" });
+      closeIdle();
       return true;
     },
   };

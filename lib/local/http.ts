@@ -5,7 +5,7 @@ import type { AddressInfo } from "node:net";
 export type Running = { url: string; port: number; close(): Promise<void> };
 
 /** One request as a stand-in sees it: the address is parsed once, the body is still to be read. */
-export type Exchange = { request: IncomingMessage; response: ServerResponse; url: URL };
+export type Exchange = { request: IncomingMessage; response: ServerResponse; url: URL; closeIdle(): void };
 
 /** Says no to a request; the message goes to the caller. */
 export class Refusal extends Error {
@@ -20,7 +20,7 @@ const OWN_NAMES = /^(?:localhost|127\.0\.0\.1|\[::1\])(?::\d+)?$/;
 /** Listens on the loopback address alone. Port 0 takes a free one. */
 export async function listen(port: number, handle: (exchange: Exchange) => Promise<void>): Promise<Running> {
   const server = createServer((request, response) => {
-    answer(request, response, handle).catch((error: unknown) => fail(response, error));
+    answer(request, response, (asked) => handle({ ...asked, closeIdle: () => server.closeIdleConnections() })).catch((error: unknown) => fail(response, error));
   });
   // Phones on bad links upload slowly: the stand-in must not cut them off where the service would wait.
   server.requestTimeout = 0;
@@ -37,7 +37,7 @@ export async function listen(port: number, handle: (exchange: Exchange) => Promi
   return { url: `http://127.0.0.1:${taken}`, port: taken, close };
 }
 
-async function answer(request: IncomingMessage, response: ServerResponse, handle: (exchange: Exchange) => Promise<void>) {
+async function answer(request: IncomingMessage, response: ServerResponse, handle: (asked: Omit<Exchange, "closeIdle">) => Promise<void>) {
   const host = request.headers.host ?? "";
   if (!OWN_NAMES.test(host)) return sendJson(response, 421, { error: "Only this machine's own names are served here." });
   const address = `http://${host}${request.url ?? "/"}`;

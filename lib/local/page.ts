@@ -38,7 +38,8 @@ button,.button{cursor:pointer;display:inline-flex;align-items:center;justify-con
 .stack{display:grid;gap:10px}
 .amount{font-size:28px;font-variant-numeric:tabular-nums}
 .end{margin-left:auto;font-variant-numeric:tabular-nums}
-.items{display:flex;gap:12px}
+.items{display:flex;gap:12px;align-items:baseline}
+.money{white-space:nowrap}
 .bad{color:var(--bad);font-weight:600}
 .good{color:var(--good);font-weight:600}
 :focus-visible{outline:2px solid var(--link);outline-offset:2px}

@@ -16,14 +16,14 @@ export function sendCheckout(response: ServerResponse, { object, lines }: Sessio
   const total = amountText(object.amount_total ?? 0, currency);
   const rows = lines.map((line) => {
     const count = line.quantity !== null && line.quantity > 1 ? ` <small>× ${line.quantity}</small>` : "";
-    return `<p class="items"><span>${escape(line.description ?? "")}${count}</span><span class="end">${escape(amountText(line.amount_total, currency))}</span></p>`;
+    return `<p class="items"><span>${escape(line.description ?? "")}${count}</span><span class="end money">${escape(amountText(line.amount_total, currency))}</span></p>`;
   });
   const email = object.customer_email
     ? `<p class="items"><span>Receipt to</span><span class="end">${escape(object.customer_email)}</span></p>`
     : '<p><label>E-mail for the receipt<input name="email" type="email" autocomplete="email"></label></p>';
   const body = `<h1>Payment</h1>
 ${declined ? '<p class="bad" role="alert">The card was declined. Nothing was paid.</p>' : ""}
-<form method="post" action="/pay/${object.id}"><div class="sheet">${rows.join("")}<p class="items"><strong>Total</strong><strong class="end amount">${escape(total)}</strong></p>${email}</div>
+<form method="post" action="/pay/${object.id}"><div class="sheet">${rows.join("")}<p class="items"><strong>Total</strong><strong class="end money amount">${escape(total)}</strong></p>${email}</div>
 <div class="stack"><button class="main" name="action" value="pay">Pay ${escape(total)}</button>
 <button name="action" value="decline">Decline</button>
 ${object.cancel_url ? `<a class="button" href="${escape(object.cancel_url)}">Leave</a>` : ""}</div></form>

@@ -3,7 +3,7 @@ import { type Exchange, listen, readJson, readText, Refusal, type Running, sendJ
 import { serveApi } from "./api";
 import { ApiError } from "./api-error";
 import { type Books, newestEvents, openBooks, type SessionRecord } from "./books";
-import { type Deliveries, openDeliveries, RETRY_DELAYS_MS } from "./deliveries";
+import { Deliveries, RETRY_DELAYS_MS } from "./deliveries";
 import { decline, pay } from "./money";
 import { sendCheckout, sendClosed, sendUnknown } from "./pages";
 import { expireSession } from "./sessions";
@@ -31,7 +31,7 @@ export async function startPaymentService(options: PaymentOptions): Promise<Runn
   const { secretKey, webhookSecret, webhookUrl, now = Date.now, retryDelaysMs = RETRY_DELAYS_MS } = options;
   const books = openBooks(options.folder);
   const faults = openFaults(PAYMENT_FAULTS);
-  const deliveries = openDeliveries({ books, faults, webhookUrl, webhookSecret, retryDelaysMs, now });
+  const deliveries = new Deliveries({ books, faults, webhookUrl, webhookSecret, retryDelaysMs, now });
   const desk = { books, deliveries, now };
   let ownUrl = "";
   const api = { ...desk, faults, secretKey, pageOf: (id: string) => `${ownUrl}/pay/${id}` };
