@@ -37,3 +37,11 @@ export const read = async <T>(path: string, signal?: AbortSignal): Promise<T> =>
 export async function call<T>(path: string, body: unknown, key: string = crypto.randomUUID(), method: "POST" | "PUT" | "DELETE" = "POST"): Promise<T> {
   return answerOf<T>(await send(path, { method, headers: { "content-type": "application/json", "idempotency-key": key }, body: JSON.stringify(body) }));
 }
+
+/** What a form shows of a failed write: the message for a field, those for the summary, and what is missing first. */
+export function faultsOf(error: unknown): { field: (name: string) => string | null; list: { name?: string; message: string }[]; missing: string[] } {
+  if (!error) return { field: () => null, list: [], missing: [] };
+  if (!(error instanceof CallError)) return { field: () => null, list: [{ message: "That did not go through. Nothing was saved." }], missing: [] };
+  const fields = Object.entries(error.fields).flatMap(([name, messages]) => messages.map((message) => (name === "form" ? { message } : { name, message })));
+  return { field: (name) => error.fields[name]?.join(" ") ?? null, list: fields.length > 0 ? fields : [{ message: error.message }, ...error.missing.map((message) => ({ message }))], missing: error.missing };
+}
