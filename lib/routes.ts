@@ -5,9 +5,10 @@ const apiMove = (moveId: string) => `${v1}/moves/${moveId}`;
 
 export const routes = {
   home: () => "/",
-  signIn: (next?: string) => (next ? `/sign-in?next=${encodeURIComponent(next)}` : "/sign-in"),
+  signIn: (next?: string, after?: "reset") => (next ? `/sign-in?next=${encodeURIComponent(next)}` : after ? `/sign-in?after=${after}` : "/sign-in"),
+  signInLink: () => "/sign-in/link",
   signUp: () => "/sign-up",
-  checkMail: () => "/check-mail",
+  checkMail: (after?: "sign-up" | "sign-in" | "reset" | "again") => (after ? `/check-mail?after=${after}` : "/check-mail"),
   forgotPassword: () => "/forgot-password",
   resetPassword: (token: string) => `/reset/${token}`,
   verifyAddress: (token: string) => `/verify/${token}`,
@@ -22,7 +23,8 @@ export const routes = {
   prep: (moveId: string) => `${move(moveId)}/prep`,
   findings: (moveId: string) => `${move(moveId)}/findings`,
   finding: (moveId: string, findingId: string) => `${move(moveId)}/findings/${findingId}`,
-  visit: (moveId: string) => `${move(moveId)}/findings/visit`,
+  /** Without a leg: the one that is next. */
+  visit: (moveId: string, legId?: string) => `${move(moveId)}/findings/visit${legId ? `?leg=${legId}` : ""}`,
   postFinding: (moveId: string, inspectionId: string) => `${move(moveId)}/findings/new?visit=${inspectionId}`,
   accept: (moveId: string, legId: string) => `${move(moveId)}/findings/accept/${legId}`,
   fees: (moveId: string) => `${move(moveId)}/fees`,
@@ -54,6 +56,8 @@ export const routes = {
     invitation: (moveId: string, invitationId: string) => `${apiMove(moveId)}/invitations/${invitationId}`,
     followLinks: (moveId: string) => `${apiMove(moveId)}/follow-links`,
     followLink: (moveId: string, followId: string) => `${apiMove(moveId)}/follow-links/${followId}`,
+    /** Where the upload library of page and file service finds us. */
+    uploads: () => "/api/uploadthing",
     photos: (moveId: string) => `${apiMove(moveId)}/photos`,
     photo: (moveId: string, photoId: string) => `${apiMove(moveId)}/photos/${photoId}`,
     photoFile: (moveId: string, photoId: string, size: "preview" | "original") => `${apiMove(moveId)}/photos/${photoId}/${size}`,

@@ -14,5 +14,8 @@ export const PHOTO_MAX_BYTES = 25 * 1024 * 1024;
 export const PHOTO_MAX_PIXELS = 60_000_000;
 /** The small proof that goes up first. */
 export const PROOF_MAX_BYTES = 1024 * 1024;
+export const PROOF_MAX_SIDE_PX = 1600;
+/** What screens show of an original that has been checked. */
+export const PREVIEW_MAX_SIDE_PX = 2048;
 export const PHOTOS_PER_SUBJECT = 20;
 export const PHOTOS_PER_MOVE = 500;
