@@ -1,7 +1,7 @@
 import "server-only";
 import { betterAuth } from "better-auth";
 import { drizzleAdapter } from "better-auth/adapters/drizzle";
-import { createAuthEndpoint } from "better-auth/api";
+import { APIError, createAuthEndpoint } from "better-auth/api";
 import { setSessionCookie } from "better-auth/cookies";
 import { nextCookies } from "better-auth/next-js";
 import { magicLink } from "better-auth/plugins";
@@ -12,6 +12,8 @@ import { env } from "@/lib/env";
 import { newId, sha256Hex, type IdKind } from "@/lib/ids";
 import { putMail } from "@/lib/outbox/commands";
 import { routes } from "@/lib/routes";
+import { unsafeHashPassword, unsafeNoteProven, unsafeVerifyPassword } from "@/lib/viewer/commands";
+import { unsafeMaySignIn } from "@/lib/viewer/queries";
 
 /** Minutes that a mailed sign-in or reset link lives (ASVS 5.0 6.5.5). */
 const LINK_SECONDS = 600;
@@ -29,12 +31,17 @@ const signInProven = () => ({
       const user = await ctx.context.internalAdapter.findUserById(ctx.body.userId);
       if (!user) throw ctx.error("UNAUTHORIZED");
       const session = await ctx.context.internalAdapter.createSession(user.id);
-      if (!session) throw ctx.error("INTERNAL_SERVER_ERROR");
+      if (!session) throw ctx.error("UNAUTHORIZED");
       await setSessionCookie(ctx, { session, user });
       return { userId: user.id };
     }),
   },
 });
+
+/** Whatever way in was taken: a disabled person gets no session. */
+async function refuseDisabled(session: { userId: string }) {
+  if (!(await unsafeMaySignIn(session.userId))) throw new APIError("UNAUTHORIZED", { code: "DISABLED" });
+}
 
 function make() {
   return betterAuth({
@@ -45,8 +52,10 @@ function make() {
     user: { additionalFields: { siteAdmin: { type: "boolean", input: false, defaultValue: false }, disabledAt: { type: "date", input: false, required: false } } },
     emailAndPassword: {
       enabled: true,
+      // Counts UTF-16 units; what a person may choose is decided in lib/viewer/password, by characters.
       minPasswordLength: 12,
-      maxPasswordLength: 256,
+      maxPasswordLength: 512,
+      password: { hash: unsafeHashPassword, verify: ({ hash, password }) => unsafeVerifyPassword(hash, password) },
       requireEmailVerification: true,
       revokeSessionsOnPasswordReset: true,
       resetPasswordTokenExpiresIn: LINK_SECONDS,
@@ -54,6 +63,8 @@ function make() {
         await putMail(db(), { kind: "reset-password", to: user.email, payload: { name: user.name, url: link(routes.resetPassword(token)) }, dedupe: `reset:${sha256Hex(token)}` }, new Date());
       },
       onPasswordReset: async ({ user }) => {
+        // The link came by mail and replaced whatever password was there, so the address is proven.
+        await unsafeNoteProven(user.id);
         await putMail(db(), { kind: "password-changed", to: user.email, payload: { name: user.name }, dedupe: `password-changed:${user.id}:${Date.now()}` }, new Date());
       },
     },
@@ -65,15 +76,22 @@ function make() {
         await putMail(db(), { kind: "verify-address", to: user.email, payload: { name: user.name, url: link(routes.verifyAddress(token)) }, dedupe: `verify:${sha256Hex(token)}` }, new Date());
       },
     },
-    session: { expiresIn: 7 * DAY, updateAge: DAY, freshAge: 900, cookieCache: { enabled: false } },
+    // One-time values are looked up by their hash, so that a copy of the table opens nothing.
+    verification: { storeIdentifier: "hashed" },
+    // Moved on at most every quarter of an hour: the account page shows it as the last use.
+    session: { expiresIn: 7 * DAY, updateAge: 900, freshAge: 900, cookieCache: { enabled: false } },
+    databaseHooks: { session: { create: { before: refuseDisabled } } },
+    // Refusals are told to the person; the library would write addresses into the log.
+    logger: { level: "error" },
     advanced: {
+      ipAddress: { ipAddressHeaders: [env().TRUSTED_PROXY_HEADER ?? []].flat(), disableIpTracking: !env().TRUSTED_PROXY_HEADER },
       useSecureCookies: false,
       cookiePrefix: "__Host-tow",
       defaultCookieAttributes: { secure: true, httpOnly: true, sameSite: "lax", path: "/" },
       cookies: { session_token: { name: "__Host-sid" } },
       database: { generateId: ({ model }) => newId(KIND_OF_MODEL[model] ?? "verification") },
     },
-    // Our own limits stand before every call; see lib/viewer/limit.
+    // Our own limits stand before every call; see lib/viewer/limits.
     rateLimit: { enabled: false },
     telemetry: { enabled: false },
     plugins: [

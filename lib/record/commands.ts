@@ -1,7 +1,7 @@
 import "server-only";
 import { desc, eq } from "drizzle-orm";
 import type { Tx } from "@/db/client";
-import { record, signatures } from "@/db/schema";
+import { record, signatures, siteLog } from "@/db/schema";
 import type { EnteredFor } from "@/lib/access/types";
 import type { Part } from "@/lib/access/vocabulary";
 import { newId, sha256Hex } from "@/lib/ids";
@@ -42,4 +42,9 @@ export async function keepSignature(tx: Tx, given: NewSignature, at: Date): Prom
 /** Lifts a signature because what it covered has changed. */
 export async function liftSignature(tx: Tx, signatureId: string, why: string, at: Date): Promise<void> {
   await tx.update(signatures).set({ liftedAt: at, liftedWhy: why }).where(eq(signatures.id, signatureId));
+}
+
+/** Appends to the log of what happened outside of any move: accounts, companies, administration. No secrets in `detail`. */
+export async function appendSiteLog(tx: Pick<Tx, "insert">, entry: { kind: string; byUserId: string | null; detail: Record<string, unknown> }, at: Date): Promise<void> {
+  await tx.insert(siteLog).values({ id: newId("siteLog"), ...entry, at });
 }

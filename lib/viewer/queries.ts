@@ -16,3 +16,20 @@ export async function unsafeViewerOf(userId: string, sessionId: string | null, r
     .orderBy(companies.name);
   return { ...user, sessionId, memberships };
 }
+
+/** No viewer: asked before a session begins, whatever way in was taken. */
+export async function unsafeMaySignIn(userId: string): Promise<boolean> {
+  const [user] = await db().select({ disabledAt: users.disabledAt }).from(users).where(eq(users.id, userId));
+  return Boolean(user) && user?.disabledAt === null;
+}
+
+export type Person = { userId: string; name: string; email: string; emailVerified: boolean; disabled: boolean };
+
+/** No viewer: the forms in front of sign-in ask. What it finds decides about mail alone, never about what the asker is told. */
+export async function unsafeFindPerson(by: { email: string } | { userId: string }, reader: Reader = db()): Promise<Person | null> {
+  const [row] = await reader.select({ userId: users.id, name: users.name, email: users.email, emailVerified: users.emailVerified, disabledAt: users.disabledAt })
+    .from(users).where("email" in by ? eq(users.email, by.email) : eq(users.id, by.userId));
+  if (!row) return null;
+  const { disabledAt, ...person } = row;
+  return { ...person, disabled: disabledAt !== null };
+}

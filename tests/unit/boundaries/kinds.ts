@@ -8,6 +8,8 @@ export const ROOMS = [
   "record",
   "outbox",
   "standing",
+  "account",
+  "companies",
   "parties",
   "moves",
   "evidence",
@@ -18,6 +20,7 @@ export const ROOMS = [
   "fees",
   "movement",
   "timeline",
+  "admin",
 ] as const;
 
 /** Folders of lib that are no rooms: doors, services and what runs beside the application. */
