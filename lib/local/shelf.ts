@@ -1,3 +1,4 @@
+import { randomInt } from "node:crypto";
 import { mkdirSync, readdirSync, readFileSync, renameSync, rmSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 
@@ -49,6 +50,6 @@ let countInProcess = 0;
 /** An id that sorts by time, also within one millisecond. */
 export function timeId(now = Date.now()): string {
   countInProcess = (countInProcess + 1) % 36 ** 4;
-  const random = Math.floor(Math.random() * 36 ** 4);
+  const random = randomInt(36 ** 4);
   return [now.toString(36).padStart(9, "0"), countInProcess.toString(36).padStart(4, "0"), random.toString(36).padStart(4, "0")].join("");
 }
