@@ -1,16 +1,16 @@
 import { NextResponse, type NextRequest } from "next/server";
+import { env } from "@/lib/env";
 
 /** Hosts of the file service, which the browser sends photos to and is redirected to for reading them. */
 function fileHosts(): string {
-  const ingest = process.env.UPLOADTHING_INGEST_URL;
-  const files = process.env.UPLOADTHING_UFS_HOST;
+  const { UPLOADTHING_INGEST_URL: ingest, UPLOADTHING_UFS_HOST: files } = env();
   if (!ingest) return "https://*.ingest.uploadthing.com https://*.ufs.sh";
   const { protocol } = new URL(ingest);
   return [new URL(ingest).origin, files ? `${protocol}//${files}` : ""].filter(Boolean).join(" ");
 }
 
 function policyWith(nonce: string): string {
-  const dev = process.env.NODE_ENV === "development";
+  const dev = env().NODE_ENV === "development";
   return [
     "default-src 'self'",
     `script-src 'self' 'nonce-${nonce}' 'strict-dynamic'${dev ? " 'unsafe-eval'" : ""}`,
@@ -50,7 +50,7 @@ export function proxy(request: NextRequest) {
   response.headers.set("cross-origin-resource-policy", "same-origin");
   response.headers.set("permissions-policy", "camera=(self), geolocation=(), microphone=(), payment=(), usb=()");
   if (!isApi) response.headers.set("cache-control", "private, no-store");
-  if (process.env.APP_URL?.startsWith("https://")) response.headers.set("strict-transport-security", "max-age=63072000; includeSubDomains");
+  if (env().APP_URL.startsWith("https://")) response.headers.set("strict-transport-security", "max-age=63072000; includeSubDomains");
   return response;
 }
 

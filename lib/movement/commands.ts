@@ -13,7 +13,7 @@ import { allowOnLeg, writeOnMove, type MoveWrite } from "@/lib/standing/commands
 import { unsafeGatherFacts } from "@/lib/standing/queries";
 import { denyClosing, denyInstruction, denyRelease } from "@/lib/standing/rules";
 import type { LegFacts, MoveFacts } from "@/lib/standing/types";
-import { EVENT_CODES } from "@/lib/timeline/event-codes";
+import { EVENT_CODES } from "./event-codes";
 import type { Attempt, Viewer } from "@/lib/viewer/types";
 import type { CloseMove, GiveInstruction, MakeSighting, RecordArrival, ReleaseUnit, RetractSighting, WithdrawInstruction } from "./input";
 import { arrivalStatement, closingStatement, denyRetraction, denySighting, denyTime, releaseStatement } from "./rules";

@@ -3,7 +3,7 @@ import type { PhotoView } from "@/lib/evidence/types";
 import type { Condition } from "@/lib/standing/types";
 import type { SightingKind } from "./vocabulary";
 
-/** A report of where the unit was; codes come from lib/timeline/event-codes. */
+/** A report of where the unit was; codes come from event-codes. */
 export type SightingView = {
   id: string;
   legId: string;

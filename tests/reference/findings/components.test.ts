@@ -1,6 +1,8 @@
 import { describe, expect, it } from "vitest";
 import { COMPONENT_GROUPS, COMPONENTS, findComponent } from "@/lib/findings/components";
-import { axlesOf, findPlace, PLACE_KINDS, placesOf, truckOf } from "@/lib/findings/places";
+import { axlesOf, kindsOf, PLACE_KINDS, usualPlaces } from "@/lib/findings/places";
+import { placesOn } from "@/lib/moves/places";
+import { AXLES } from "@/lib/moves/vocabulary";
 
 /** ASC X12 element 1488, bad-order reason, the letters of use for a locomotive, in our words. */
 const ELEMENT_1488 = {
@@ -56,28 +58,20 @@ describe("components", () => {
 });
 
 describe("places", () => {
-  it.each([4, 6] as const)("a unit with %i axles has its wheels, axles and trucks", (axles) => {
-    const places = placesOf(axles);
-    const ids = places.map(({ id }) => id);
-    expect(new Set(ids).size).toBe(ids.length);
-    expect(places.filter(({ kind }) => kind === "wheel").length).toBe(axles * 2);
-    expect(places.filter(({ kind }) => kind === "axle").length).toBe(axles);
-    expect(ids).toEqual(expect.arrayContaining(["L1", `L${axles}`, "R1", `R${axles}`, "truck-F", "truck-rear", "coupler-F", "coupler-rear", "cab", "roof"]));
-    expect(new Set(places.map(({ kind }) => kind))).toEqual(new Set(PLACE_KINDS));
+  it.each(AXLES)("every place on a unit with %i axles is of some sort, and every sort has a place", (axles) => {
+    const places = placesOn({ axles });
+    for (const { id } of places) expect(kindsOf(id), id).not.toEqual([]);
+    expect(new Set(places.flatMap(({ id }) => kindsOf(id)))).toEqual(new Set(PLACE_KINDS));
   });
 
-  it("knows no fifth wheel on four axles", () => {
-    expect(findPlace(4, "L5")).toBeNull();
-    expect(findPlace(6, "L5")?.label).toBe("Wheel L5");
+  it("every component that is found somewhere has a usual place", () => {
+    for (const { id, places } of COMPONENTS) expect(usualPlaces(4, places).length > 0, id).toBe(places.length > 0);
   });
 
-  it.each([
-    [4, 2, "truck-F"],
-    [4, 3, "truck-rear"],
-    [6, 3, "truck-F"],
-    [6, 4, "truck-rear"],
-  ] as const)("on %i axles, axle %i turns in the %s", (axles, number, truck) => {
-    expect(truckOf(axles, number)).toBe(truck);
+  it("finds a knuckle at the couplers and a flat spot at the wheels", () => {
+    expect(usualPlaces(4, findComponent("knuckle")?.places ?? []).map(({ id }) => id)).toEqual(["coupler-f", "coupler-r"]);
+    expect(usualPlaces(6, ["axle"])).toHaveLength(12);
+    expect(kindsOf("keel")).toEqual([]);
   });
 
   it("draws no outline for other axle counts", () => {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { SIGHTING_KINDS } from "@/lib/movement/vocabulary";
-import { EVENT_CODES, eventCodeText } from "@/lib/timeline/event-codes";
+import { EVENT_CODES, eventCodeText } from "@/lib/movement/event-codes";
 
 /** CLM list and X12 element 304, as published; a dash where the list has no such code. */
 const PUBLISHED = `
