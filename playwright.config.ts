@@ -15,6 +15,8 @@ const CHROMIUM_FLAGS = [
 /** Drives the site that tests/support/run.ts started; it starts nothing itself. */
 export default defineConfig({
   testDir: "tests/e2e",
+  // Lets helpers of the tests load server files, which "server-only" would otherwise refuse.
+  tsconfig: "lib/local/tsconfig.json",
   outputDir: ".test/e2e",
   workers: 1,
   retries: 0,

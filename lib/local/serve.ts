@@ -20,9 +20,15 @@ async function main(): Promise<void> {
   const buildFolder = process.env.NEXT_DIST_DIR ?? ".next";
   if (isStale(process.cwd(), buildFolder)) process.stderr.write("The build may be of other sources than these; npm run build renews it.\n");
   const port = process.env.PORT ?? "3000";
-  const server = spawn(process.execPath, nextArguments(false, port), { stdio: "inherit", env: nextEnvironment(process.env, buildFolder, false) });
-  for (const name of ["SIGINT", "SIGTERM"] as const) process.on(name, () => server.kill("SIGTERM"));
-  server.once("exit", (code, signal) => process.exit(signal === null ? (code ?? 1) : 0));
+  const server = spawn(process.execPath, nextArguments(false, port, process.env.HOST), { stdio: "inherit", env: nextEnvironment(process.env, buildFolder, false) });
+  let asked = false;
+  for (const name of ["SIGINT", "SIGTERM"] as const) {
+    process.on(name, () => {
+      asked = true;
+      server.kill("SIGTERM");
+    });
+  }
+  server.once("exit", (code) => process.exit(asked ? 0 : (code ?? 1)));
 }
 
 async function requireSafeServer(uri: string): Promise<void> {

@@ -11,9 +11,9 @@ const TSX_ARGUMENTS = ["--import", "tsx"];
 /** How the web server is to run: on the build in a folder, or compiling as it goes. */
 export type ServerPlace = { root: string; port: number; buildFolder: string; development: boolean; env: NodeJS.ProcessEnv; log: string };
 
-/** The arguments of Next.js for a port of this machine. The name makes it build its own links with "localhost". */
-export function nextArguments(development: boolean, port: number | string): string[] {
-  return [NEXT_PROGRAM, development ? "dev" : "start", "-p", String(port), "-H", "localhost"];
+/** The arguments of Next.js. Unless told otherwise it can be reached from this machine alone. */
+export function nextArguments(development: boolean, port: number | string, host = "localhost"): string[] {
+  return [NEXT_PROGRAM, development ? "dev" : "start", "-p", String(port), "-H", host];
 }
 
 /** The environment that Next.js gets: the address "localhost" has to mean 127.0.0.1 first, where browsers and tools look as well. */

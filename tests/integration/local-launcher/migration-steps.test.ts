@@ -37,12 +37,11 @@ async function yards(): Promise<unknown> {
 /** Stands for a process killed at its nth statement, counted over everything that it sends: before it ran, or right after. */
 async function runKilledAt(nth: number, after: boolean): Promise<boolean> {
   const victim = await connect(schema);
-  const query = victim.query.bind(victim);
   let sent = 0;
-  const counting = async (...args: Parameters<typeof query>): Promise<unknown> => {
+  const counting = async (statement: string, values: unknown[] = []): Promise<unknown> => {
     sent += 1;
     if (sent === nth && !after) throw new Error("killed");
-    const answer = await query(...args);
+    const answer = await victim.query(statement, values);
     if (sent === nth) throw new Error("killed");
     return answer;
   };
