@@ -1,8 +1,8 @@
 import { PARTS, type Part } from "@/lib/access/vocabulary";
 import { STAGES, type Stage } from "@/lib/standing/vocabulary";
 
-/** Columns by which the list can be put in order. */
-export const SORT_KEYS = ["waiting", "opened", "unit", "from", "stage"] as const;
+/** Columns by which the list can be put in order; `waiting` and `days` count days, so the longest come last unless descending. */
+export const SORT_KEYS = ["waiting", "days", "unit", "from", "stage"] as const;
 export type SortKey = (typeof SORT_KEYS)[number];
 
 /** `me`: what the viewer can do; `company`: what waits on any of their companies; otherwise one part. */
@@ -13,7 +13,7 @@ export type StageFilter = "open" | "all" | Stage;
 
 export type MoveFilter = { q: string; waiting: WaitingFilter | null; stage: StageFilter; carrier: string | null; sort: SortKey; descending: boolean; page: number };
 
-export const DEFAULT_FILTER: MoveFilter = { q: "", waiting: null, stage: "open", carrier: null, sort: "waiting", descending: false, page: 1 };
+export const DEFAULT_FILTER: MoveFilter = { q: "", waiting: null, stage: "open", carrier: null, sort: "waiting", descending: true, page: 1 };
 
 export const PAGE_SIZE = 25;
 const MAX_PAGE = 10_000;
@@ -29,14 +29,15 @@ const oneOf = <T extends string>(list: readonly T[], value: string): T | null =>
 /** A filter as it stands in an address. What is not known there counts as not given, so that an old link still opens. */
 export function parseFilter(given: Given): MoveFilter {
   const sort = one(given.sort);
+  const key = oneOf(SORT_KEYS, sort.replace(/^-/, ""));
   const page = Number(one(given.page));
   return {
     q: one(given.q).slice(0, 100),
     waiting: oneOf(WAITING, one(given.waiting)),
     stage: oneOf(STAGE_CHOICES, one(given.stage)) ?? "open",
     carrier: one(given.carrier).slice(0, 200) || null,
-    sort: oneOf(SORT_KEYS, sort.replace(/^-/, "")) ?? DEFAULT_FILTER.sort,
-    descending: sort.startsWith("-"),
+    sort: key ?? DEFAULT_FILTER.sort,
+    descending: key ? sort.startsWith("-") : DEFAULT_FILTER.descending,
     page: Number.isInteger(page) && page >= 1 && page <= MAX_PAGE ? page : 1,
   };
 }
@@ -48,7 +49,7 @@ export function filterQuery(filter: MoveFilter): string {
   if (filter.waiting) query.set("waiting", filter.waiting);
   if (filter.stage !== DEFAULT_FILTER.stage) query.set("stage", filter.stage);
   if (filter.carrier) query.set("carrier", filter.carrier);
-  if (filter.sort !== DEFAULT_FILTER.sort || filter.descending) query.set("sort", `${filter.descending ? "-" : ""}${filter.sort}`);
+  if (filter.sort !== DEFAULT_FILTER.sort || filter.descending !== DEFAULT_FILTER.descending) query.set("sort", `${filter.descending ? "-" : ""}${filter.sort}`);
   if (filter.page > 1) query.set("page", String(filter.page));
   const text = query.toString();
   return text ? `?${text}` : "";

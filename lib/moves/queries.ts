@@ -45,10 +45,10 @@ function conditionOf(viewer: Viewer, filter: MoveFilter): SQL | undefined {
 
 /** Every order ends with the id, so that pages neither repeat nor skip a move. */
 function orderOf({ sort, descending }: MoveFilter): SQL[] {
-  const way = descending ? desc : asc;
+  const [way, back] = descending ? [desc, asc] : [asc, desc];
   const by: Record<MoveFilter["sort"], SQL[]> = {
-    waiting: [sql`${moves.waitingSince} is null`, way(moves.waitingSince)],
-    opened: [way(moves.openedAt)],
+    waiting: [sql`${moves.waitingSince} is null`, back(moves.waitingSince)],
+    days: [back(moves.openedAt)],
     unit: [way(equipment.mark), way(sql`length(${equipment.number})`), way(equipment.number)],
     from: [way(moves.originName), way(moves.destinationName)],
     stage: [way(moves.stage)],
