@@ -21,7 +21,7 @@ export const BROWSER_NEEDS: Need[] = [{ program: "chromium", package: "chromium"
 
 const SYSTEM_FOLDERS = ["/usr/sbin", "/usr/bin", "/sbin", "/bin"];
 /** Waits for another package run to end rather than fail, and never asks. */
-const APT = ["-y", "-q", "-o", "DPkg::Lock::Timeout=120", "-o", "Dpkg::Use-Pty=0", "-o", "Dpkg::Options::=--force-confold"];
+const APT = ["-y", "-q", "-o", "DPkg::Lock::Timeout=120", "-o", "Acquire::Retries=3", "-o", "Acquire::http::Timeout=60", "-o", "Dpkg::Use-Pty=0", "-o", "Dpkg::Options::=--force-confold"];
 const APT_ENV = { DEBIAN_FRONTEND: "noninteractive", NEEDRESTART_SUSPEND: "1", APT_LISTCHANGES_FRONTEND: "none" };
 
 /** Installs from Debian what is missing, and nothing when all is there. */
