@@ -34,7 +34,7 @@ export async function startServer({ root, port, buildFolder, development, env, l
   return part(running);
 }
 
-/** Starts the worker that sends the waiting e-mails. */
+/** Starts the worker, which sends what waits and looks after what arrived. */
 export async function startWorker(root: string, env: NodeJS.ProcessEnv, log: string): Promise<Part> {
   return part(await startScript(root, "lib/local/worker.ts", env, log));
 }

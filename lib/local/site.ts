@@ -55,7 +55,7 @@ export async function prepareSite(place: SitePlace, parts: Parts, { database, ke
 export async function serveSite(site: PreparedSite, parts: Parts, development: boolean): Promise<void> {
   const { root, folder, buildFolder, ports, env } = site;
   if (!development) await buildWhenStale(root, buildFolder, env, logFile(folder, "build"));
-  await parts.start("The mail worker", () => startWorker(root, env, logFile(folder, "worker")));
+  await parts.start("The worker", () => startWorker(root, env, logFile(folder, "worker")));
   const server = { root, port: ports.app, buildFolder, development, env, log: logFile(folder, "server") };
   await step("Starting the web server", () => parts.start("The web server", () => startServer(server)));
 }
