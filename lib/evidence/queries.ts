@@ -1,7 +1,7 @@
 import "server-only";
 import { and, asc, eq, gt, inArray, isNull, lte, or, sql } from "drizzle-orm";
 import { db, type Reader } from "@/db/client";
-import { companies, photos, photoUses, users } from "@/db/schema";
+import { companies, moves, photos, photoUses, users } from "@/db/schema";
 import { maySee } from "@/lib/access/policy";
 import { requireMove } from "@/lib/access/scope";
 import type { HeldPart } from "@/lib/access/types";
@@ -15,11 +15,11 @@ import type { PhotoSubject, PhotoType } from "./vocabulary";
 const columns = {
   id: photos.id, moveId: photos.moveId, state: photos.state, refusedWhy: photos.refusedWhy, name: photos.name, type: photos.type, sizeBytes: photos.sizeBytes, sha256: photos.sha256,
   widthPx: photos.widthPx, heightPx: photos.heightPx, capturedAt: photos.capturedAt, camera: photos.camera, latitude: photos.latitude, longitude: photos.longitude,
-  takenBy: users.name, takenById: photos.takenBy, takenByCompany: companies.name, createdAt: photos.createdAt,
+  takenBy: users.name, takenById: photos.takenBy, takenByCompany: companies.name, createdAt: photos.createdAt, zone: moves.originZone,
 };
 
 /** Photos with the names of who took them; the caller adds the condition. */
-const select = (reader: Reader) => reader.select(columns).from(photos).innerJoin(users, eq(users.id, photos.takenBy)).innerJoin(companies, eq(companies.id, photos.companyId));
+const select = (reader: Reader) => reader.select(columns).from(photos).innerJoin(users, eq(users.id, photos.takenBy)).innerJoin(companies, eq(companies.id, photos.companyId)).innerJoin(moves, eq(moves.id, photos.moveId));
 
 type Row = Awaited<ReturnType<typeof select>>[number];
 

@@ -23,6 +23,8 @@ export type PhotoView = {
   takenByCompany: string;
   /** When the phone announced it. */
   at: string;
+  /** Zone of the move's origin, in which times are shown. */
+  zone: string;
   /** Preview, or the proof while there is no preview. */
   previewUrl: string;
   /** Null until the original has arrived and its hash agrees. */

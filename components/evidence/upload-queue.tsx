@@ -1,0 +1,46 @@
+"use client";
+
+import { useEffect, type ReactNode } from "react";
+import { Disclosure } from "@/components/ui/disclosure";
+import { wordsOfQueue } from "@/lib/evidence/words";
+import { EntryRow } from "./entry-row";
+import { pageQueue, useEntries } from "./page-queue";
+
+/** Keeps sending the photos of one person while they move between the pages of a case, takes up what an earlier visit left unsent, and says how far it is. */
+export function UploadQueue({ userId, children }: { userId: string; children?: ReactNode }) {
+  const entries = useEntries();
+  const words = wordsOfQueue(entries);
+  const unsent = words !== null;
+  const shown = entries.filter(({ step }) => step !== "done");
+
+  useEffect(() => {
+    void pageQueue().openFor(userId);
+    const again = () => pageQueue().retry();
+    window.addEventListener("online", again);
+    return () => window.removeEventListener("online", again);
+  }, [userId]);
+
+  useEffect(() => {
+    if (!unsent) return;
+    const warn = (event: BeforeUnloadEvent) => event.preventDefault();
+    window.addEventListener("beforeunload", warn);
+    return () => window.removeEventListener("beforeunload", warn);
+  }, [unsent]);
+
+  return (
+    <>
+      {shown.length > 0 && (
+        <section aria-label="Photos on their way" className="mb-4 border-l-[5px] border-slate bg-slate-wash px-3.5 text-14 print:hidden">
+          <Disclosure summary={words ?? "Some photos were not taken"} className="border-y-0">
+            <ul>
+              {shown.map((entry) => (
+                <EntryRow key={entry.clientId} entry={entry} />
+              ))}
+            </ul>
+          </Disclosure>
+        </section>
+      )}
+      {children}
+    </>
+  );
+}
