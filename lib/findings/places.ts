@@ -1,46 +1,37 @@
-import { AXLES, type Axles } from "@/lib/moves/vocabulary";
+import { placesOn, type Place, type UnitForm } from "@/lib/moves/places";
+import { AXLES, BODY_SHAPES, F_ENDS, type Axles } from "@/lib/moves/vocabulary";
 
-/** What sort of spot a place is; a component says which sorts it is found at. */
+/** What sort of spot a place is; a component says which sorts it is found at. An axle is pointed at by one of its wheels. */
 export const PLACE_KINDS = ["wheel", "axle", "truck", "coupler", "end", "side", "cab", "roof", "underframe", "tank"] as const;
 export type PlaceKind = (typeof PLACE_KINDS)[number];
 
-/** A spot on the unit that a finding, a photo or a measurement can point at. */
-export type Place = { id: string; kind: PlaceKind; label: string };
-
-const WHOLE_UNIT: readonly Place[] = [
-  { id: "coupler-F", kind: "coupler", label: "Coupler, F end" },
-  { id: "coupler-rear", kind: "coupler", label: "Coupler, rear end" },
-  { id: "end-F", kind: "end", label: "F end" },
-  { id: "end-rear", kind: "end", label: "Rear end" },
-  { id: "left-side", kind: "side", label: "Left side, looking toward the F end" },
-  { id: "right-side", kind: "side", label: "Right side, looking toward the F end" },
-  { id: "cab", kind: "cab", label: "Cab" },
-  { id: "roof", kind: "roof", label: "Roof" },
-  { id: "underframe", kind: "underframe", label: "Underframe" },
-  { id: "fuel-tank", kind: "tank", label: "Fuel tank" },
-  { id: "main-reservoirs", kind: "tank", label: "Main reservoirs" },
+/** Sorts of spot by the start of a place's id; the first that fits counts. */
+const KINDS_OF: readonly [start: string, kinds: readonly PlaceKind[]][] = [
+  ["wheel-", ["wheel", "axle"]],
+  ["coupler-", ["coupler", "end"]],
+  ["hoses-", ["end"]],
+  ["pilot-", ["end"]],
+  ["truck-", ["truck"]],
+  ["brake-rigging-", ["truck", "wheel"]],
+  ["steps-", ["end", "side"]],
+  ["hand-brake", ["end", "side", "cab"]],
+  ["main-reservoirs", ["tank"]],
+  ["fuel-tank", ["tank"]],
+  ["cab", ["cab"]],
+  ["electrical-cabinet", ["cab", "side"]],
+  ["batteries", ["side"]],
+  ["engine", ["side"]],
+  ["cooling", ["side", "roof"]],
+  ["roof", ["roof"]],
+  ["underframe", ["underframe"]],
 ];
 
-const TRUCKS: readonly Place[] = [
-  { id: "truck-F", kind: "truck", label: "Truck at the F end" },
-  { id: "truck-rear", kind: "truck", label: "Truck at the rear end" },
-];
+/** The sorts of spot that a place is; empty for one that no unit has. */
+export const kindsOf = (placeId: string): readonly PlaceKind[] => KINDS_OF.find(([start]) => placeId.startsWith(start))?.[1] ?? [];
 
-/** Every place on a unit. Wheels and axles are counted from the end stencilled F, which may be the long hood. */
-export function placesOf(axles: Axles): readonly Place[] {
-  const numbers = Array.from({ length: axles }, (_, index) => index + 1);
-  return [
-    ...numbers.map((number): Place => ({ id: `L${number}`, kind: "wheel", label: `Wheel L${number}` })),
-    ...numbers.map((number): Place => ({ id: `R${number}`, kind: "wheel", label: `Wheel R${number}` })),
-    ...numbers.map((number): Place => ({ id: `axle-${number}`, kind: "axle", label: `Axle ${number}` })),
-    ...TRUCKS,
-    ...WHOLE_UNIT,
-  ];
-}
-
-/** The place of an id on a unit with so many axles; null when that unit has no such place. */
-export function findPlace(axles: Axles, id: string): Place | null {
-  return placesOf(axles).find((place) => place.id === id) ?? null;
+/** The places where something of these sorts is usually found, in the order of the list. */
+export function usualPlaces(axles: Axles, kinds: readonly PlaceKind[]): Place[] {
+  return placesOn({ axles }).filter(({ id }) => kindsOf(id).some((kind) => kinds.includes(kind)));
 }
 
 /** The two axle counts that outlines exist for; null for any other number. */
@@ -48,7 +39,8 @@ export function axlesOf(count: number): Axles | null {
   return AXLES.find((axles) => axles === count) ?? null;
 }
 
-/** The truck above which a wheel or axle turns: the first half of the axles belongs to the F end. */
-export function truckOf(axles: Axles, axleNumber: number): "truck-F" | "truck-rear" {
-  return axleNumber * 2 <= axles ? "truck-F" : "truck-rear";
+/** The outline of a unit as its facts name it; null when there is no drawing for such a unit. */
+export function unitFormOf({ shape, axles, fEnd }: { shape: string; axles: number; fEnd: string }): UnitForm | null {
+  const form = { shape: BODY_SHAPES.find((one) => one === shape), axles: axlesOf(axles), fEnd: F_ENDS.find((one) => one === fEnd) };
+  return form.shape && form.axles && form.fEnd ? { shape: form.shape, axles: form.axles, fEnd: form.fEnd } : null;
 }

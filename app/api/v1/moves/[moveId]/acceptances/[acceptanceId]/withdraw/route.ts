@@ -1,0 +1,5 @@
+import { withdrawAcceptance } from "@/lib/acceptance/commands";
+import { withdrawAcceptanceInput } from "@/lib/acceptance/input";
+import { command } from "@/lib/entry/command";
+
+export const POST = command(withdrawAcceptanceInput, withdrawAcceptance);
