@@ -17,7 +17,7 @@ export type Examined =
 const CHILD = fileURLToPath(new URL("./examine-child.mjs", import.meta.url));
 
 /** Address space that the runtime itself reserves without using it; what the picture may take comes on top. */
-const RUNTIME_MB = 1000;
+const RUNTIME_MB = 1400;
 
 /** Opens a picture in a process of its own with a limit on time and memory, and makes a preview without its metadata. However the process ends, this one goes on. */
 export async function examinePicture(path: string, bounds: Bounds): Promise<Examined> {
@@ -29,7 +29,7 @@ export async function examinePicture(path: string, bounds: Bounds): Promise<Exam
     if (ended.signal) return { ok: false, fault: "too-costly" };
     if (ended.code !== 0) throw new Error(`The picture process could not run: ${ended.errors.slice(0, 500)}`);
     const said = JSON.parse(ended.output) as { picture?: { widthPx: number; heightPx: number; tags: PictureTags }; fault?: string };
-    if (!said.picture) return { ok: false, fault: /pixel limit/.test(said.fault ?? "") ? "too-many-pixels" : "broken" };
+    if (!said.picture) return { ok: false, fault: /pixel limit/.test(said.fault ?? "") ? "too-many-pixels" : /memory/.test(said.fault ?? "") ? "too-costly" : "broken" };
     return { ok: true, ...said.picture, preview: await readFile(preview) };
   } finally {
     await rm(folder, { recursive: true, force: true });
