@@ -31,3 +31,12 @@ export function textsOf(detail: Detail, key: string): string[] {
 export function oneOf<T extends string>(list: readonly T[], given: unknown): T | null {
   return list.find((one) => one === given) ?? null;
 }
+
+const isChange = (one: unknown): one is { label: string; before?: unknown; after?: unknown } => typeof one === "object" && one !== null && "label" in one && typeof one.label === "string";
+
+/** Changed fields, each before and after in words. */
+export function changesOf(detail: Detail): string[] {
+  const { changes } = detail;
+  if (!Array.isArray(changes)) return [];
+  return changes.filter(isChange).map(({ label, before, after }) => `${label}: ${typeof after === "string" ? after : "left empty"}${typeof before === "string" ? `, was ${before}` : ""}`);
+}

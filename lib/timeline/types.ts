@@ -87,7 +87,8 @@ export type FollowView = {
   wantedFrom: string | null;
   wantedTo: string | null;
   stage: string;
-  position: number;
+  /** Thousandths of the route that lie behind the unit. */
+  progressMil: number;
   handings: Handing[];
   days: { day: string; entries: FollowEntry[] }[];
   goodUntil: string;
