@@ -18,14 +18,15 @@ export async function unsafeCountTry(name: LimitName, subject: string, now: Date
   const { max, windowSeconds } = LIMITS[name];
   const key = sha256Hex(`${name}:${subject}`);
   const endsMs = now.getTime() + windowSeconds * 1000;
-  await db().insert(limitCounters).values({ key, windowEndsMs: endsMs, count: 1 }).onDuplicateKeyUpdate({
-    set: {
-      // MariaDB assigns from left to right: the count must look at the old window first.
-      count: sql`if(${limitCounters.windowEndsMs} <= ${now.getTime()}, 1, ${limitCounters.count} + 1)`,
-      windowEndsMs: sql`if(${limitCounters.windowEndsMs} <= ${now.getTime()}, ${endsMs}, ${limitCounters.windowEndsMs})`,
-    },
-  });
-  const [row] = await db().select({ count: limitCounters.count, endsMs: limitCounters.windowEndsMs }).from(limitCounters).where(eq(limitCounters.key, key));
+  const counted = limitCounters.count;
+  const ends = limitCounters.windowEndsMs;
+  const [col, endsCol] = [sql.identifier(counted.name), sql.identifier(ends.name)];
+  // MariaDB assigns from left to right: the count must look at the old window first. RETURNING gives this try its own number, however many run at once.
+  const [rows] = (await db().execute(sql`
+    insert into ${limitCounters} (${sql.identifier(limitCounters.key.name)}, ${endsCol}, ${col}) values (${key}, ${endsMs}, 1)
+    on duplicate key update ${col} = if(${endsCol} <= ${now.getTime()}, 1, ${col} + 1), ${endsCol} = if(${endsCol} <= ${now.getTime()}, ${endsMs}, ${endsCol})
+    returning ${col} as count, ${endsCol} as endsMs`)) as unknown as [{ count: number; endsMs: number }[]];
+  const row = rows[0];
   if (row && row.count > max) {
     const retryAfterSeconds = Math.max(1, Math.ceil((row.endsMs - now.getTime()) / 1000));
     throw new AppError("too_many", `Too many tries. Wait ${retryAfterSeconds < 90 ? `${retryAfterSeconds} seconds` : `${Math.ceil(retryAfterSeconds / 60)} minutes`} and try again.`, { retryAfterSeconds });
