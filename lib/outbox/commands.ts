@@ -1,5 +1,5 @@
 import "server-only";
-import { and, asc, eq, lte, or } from "drizzle-orm";
+import { and, asc, eq, isNotNull, lte, or } from "drizzle-orm";
 import { db, type Tx } from "@/db/client";
 import { outbox } from "@/db/schema";
 import { env } from "@/lib/env";
@@ -57,4 +57,9 @@ export async function unsafeNoteFailed(taken: Pick<Taken, "id" | "attempts">, re
   await db().update(outbox)
     .set({ state: over ? "failed" : "ready", leaseUntil: null, lastError: reason.slice(0, 500), runAt: nextTry(taken.attempts, now) })
     .where(eq(outbox.id, taken.id));
+}
+
+/** No viewer: marks all waiting mail as done without sending it. Only for the demo scenario, whose news are old when it is loaded. */
+export async function unsafeHoldMail(now: Date): Promise<void> {
+  await db().update(outbox).set({ state: "done", doneAt: now, payload: "", lastError: "Not sent: part of the demo scenario" }).where(and(eq(outbox.state, "ready"), isNotNull(outbox.toAddress)));
 }
