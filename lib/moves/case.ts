@@ -4,7 +4,7 @@ import type { MoveFacts } from "@/lib/standing/types";
 import { standingOf } from "@/lib/standing/rules";
 import { conditionsFor, editableBy, mayStandIn, seenParts, tabCounts, towSpeedOf, turnOf } from "./case-rules";
 import { splitDays, type Waited } from "./days-split";
-import { denyCarrierChange, denyLegEdit } from "./leg-rules";
+import { denyCarrierChange, denyLegEdit, denyPayerChange } from "./leg-rules";
 import type { CaseFile, CaseLeg, CaseUnit } from "./types";
 import { BODY_SHAPES, type Axles } from "./vocabulary";
 
@@ -43,6 +43,7 @@ function legsOf({ facts, legs, parts }: CaseRows): CaseLeg[] {
       stopped: leg.stoppingOpen > 0,
       fixedBecause: denyLegEdit(leg)?.message ?? null,
       carrierFixedBecause: denyCarrierChange(leg)?.message ?? null,
+      payerFixedBecause: denyPayerChange(leg)?.message ?? null,
       conditions: conditionsFor(parts, facts, leg),
       version: row.version,
     }];

@@ -12,7 +12,8 @@ export const moveKeys = {
   lists: () => [...moveKeys.all, "list"] as const,
   list: (filter: MoveFilter) => [...moveKeys.lists(), filterQuery(filter)] as const,
   case: (moveId: string) => [...moveKeys.all, "case", moveId] as const,
-  equipment: (moveId: string) => [...moveKeys.case(moveId), "equipment"] as const,
+  /** Not under the case: somebody may be typing over it, so it is read anew only when its own form says so. */
+  equipment: (moveId: string) => [...moveKeys.all, "equipment", moveId] as const,
   draft: (draftId: string) => ["drafts", draftId] as const,
 };
 
@@ -35,7 +36,7 @@ export const caseOptions = (moveId: string) =>
     staleTime: 5_000,
   });
 
-/** The unit's answers; read anew only when asked, since somebody may be typing over them. */
+/** The unit's answers to the catalogue. */
 export const equipmentOptions = (moveId: string) =>
   queryOptions({
     queryKey: moveKeys.equipment(moveId),
@@ -57,11 +58,12 @@ export const saveDraft = (draftId: string, companyId: string, body: unknown, ver
 
 export const discardDraft = (draftId: string, key: string) => call<{ draftId: string }>(routes.api.draft(draftId), {}, key, "DELETE");
 
+export type Opening = { draftId: string | null; input: Record<string, unknown>; key: string };
+
 /** Opens a move from a draft, or without one. */
-export const openMoveMutation = (draftId: string | null) =>
+export const openMoveMutation = () =>
   mutationOptions({
-    mutationFn: ({ input, key }: { input: Record<string, unknown>; key: string }) =>
-      call<{ moveId: string; caseNumber: string }>(draftId ? routes.api.openDraft(draftId) : routes.api.moves(), input, key),
+    mutationFn: ({ draftId, input, key }: Opening) => call<{ moveId: string; caseNumber: string }>(draftId ? routes.api.openDraft(draftId) : routes.api.moves(), input, key),
   });
 
 /** One write on a case; afterwards everything of it is read anew. */

@@ -87,6 +87,8 @@ export type CaseLeg = {
   fixedBecause: string | null;
   /** Why its carrier may not be replaced any more; null while it may. */
   carrierFixedBecause: string | null;
+  /** Why its payer may not be changed any more; null while it may. */
+  payerFixedBecause: string | null;
   conditions: Condition[];
   version: number;
 };
