@@ -68,6 +68,12 @@ export function decide(payment: KnownPayment, quoteState: QuoteState, moveOpen: 
   return stays("Nothing paid yet.");
 }
 
+/** The same for a payment that no page was handed out for, and none will be. */
+export function decideWithout(state: PaymentState, refused: boolean): Decision {
+  if (!isWaiting(state)) return { to: null, outcome: "Had ended before.", flagged: false };
+  return refused ? { to: "failed", outcome: "The payment service would not open a page.", flagged: false } : { to: "expired", outcome: "No payment page was opened in time.", flagged: false };
+}
+
 const DECLINED = "payment_intent.payment_failed";
 const MONEY_BACK = /^(charge\.refund|charge\.dispute|refund\.)/;
 

@@ -6,10 +6,10 @@ import { maySeeFees, partFor, type Action } from "@/lib/access/policy";
 import { requireMove } from "@/lib/access/scope";
 import type { EnteredFor, HeldPart } from "@/lib/access/types";
 import { AppError } from "@/lib/errors";
+import { dayAt } from "@/lib/moves/when";
 import { peopleIn } from "@/lib/standing/commands";
 import type { Viewer } from "@/lib/viewer/types";
 import { isDecline } from "./checkout";
-import { dayAt } from "./day";
 import { hasLapsed } from "./rules";
 import type { ClearanceView, ClerkStep, FeeLeg, FeesView, PaidView, PaymentView, QuoteView } from "./types";
 
@@ -20,7 +20,7 @@ export async function getFees(viewer: Viewer, moveId: string, now = new Date()):
   const seen = rows.filter((leg) => maySeeFees(parts, leg.id));
   if (seen.length === 0) throw new AppError("not_found", "No fees to see on this move.");
   const legIds = seen.map((leg) => leg.id);
-  const given = await quotesOf(legIds, (legId) => dayAt(now, seen.find((leg) => leg.id === legId)?.fromZone ?? "UTC"));
+  const given = await quotesOf(legIds, (legId) => dayAt(now.toISOString(), seen.find((leg) => leg.id === legId)?.fromZone ?? "UTC"));
   const cleared = await clearancesOf(legIds);
   const payerSeats = await db().select({ legId: moveSeats.legId, companyId: moveSeats.companyId }).from(moveSeats)
     .where(and(eq(moveSeats.moveId, moveId), eq(moveSeats.part, "payer"), isNull(moveSeats.removedAt)));
@@ -43,6 +43,13 @@ export async function getFees(viewer: Viewer, moveId: string, now = new Date()):
     };
   });
   return { moveId, open, legs: await Promise.all(shown) };
+}
+
+/** The leg for which the viewer may give or enter a quote; refuses `not_found` otherwise. */
+export async function getLegToQuote(viewer: Viewer, moveId: string, legId: string): Promise<FeeLeg> {
+  const leg = (await getFees(viewer, moveId)).legs.find((one) => one.legId === legId && one.may.quote !== null);
+  if (!leg) throw new AppError("not_found", "No such leg to quote for.");
+  return leg;
 }
 
 const ANY_ENTRY: EnteredFor = { carrierName: "", source: "paper", heardOn: "", saidBy: "", reference: null };
@@ -104,9 +111,13 @@ async function namesOf(userIds: (string | null)[]): Promise<(userId: string) => 
   return (userId) => rows.find((row) => row.id === userId)?.name ?? "Somebody";
 }
 
+/** What an id of ours or of the payment service can look like; the columns hold plain ascii and refuse to be compared with more. */
+const isName = (text: string | null): text is string => text !== null && /^\w{1,120}$/.test(text);
+
 /** Where the payment behind a page stands, for who comes back from it; null when it is none that the viewer may see. */
 export async function findPaid(viewer: Viewer, moveId: string, sessionId: string): Promise<PaidView | null> {
   const { parts } = await requireMove(viewer, moveId);
+  if (!isName(sessionId)) return null;
   const [row] = await db()
     .select({ state: payments.state, amountCents: payments.amountCents, paidAt: payments.paidAt, quoteNumber: quotes.number, legId: quotes.legId, carrierName: legs.carrierName, zone: legs.fromZone })
     .from(payments).innerJoin(quotes, eq(quotes.id, payments.quoteId)).innerJoin(legs, eq(legs.id, quotes.legId))
@@ -125,7 +136,7 @@ export async function unsafeCaseHead(reader: Reader, moveId: string): Promise<{ 
 
 /** No viewer: the payment that a notice of the payment service is about, found by any of its names; null when it is none of ours. */
 export async function unsafeFindPayment({ paymentId, sessionId, intentId }: { paymentId: string | null; sessionId: string | null; intentId: string | null }) {
-  const names = [paymentId && eq(payments.id, paymentId), sessionId && eq(payments.sessionId, sessionId), intentId && eq(payments.intentId, intentId)].filter((one) => one !== null && one !== "");
+  const names = [isName(paymentId) && eq(payments.id, paymentId), isName(sessionId) && eq(payments.sessionId, sessionId), isName(intentId) && eq(payments.intentId, intentId)].filter((one) => one !== false);
   if (names.length === 0) return null;
   const [row] = await db().select().from(payments).where(or(...names)).limit(1);
   return row ?? null;

@@ -1,4 +1,5 @@
 import { AppError, type Denial } from "@/lib/errors";
+import { formatDay } from "@/lib/moves/when";
 import { LEAST_CENTS, MOST_CENTS, sumCents } from "./money";
 import type { QuoteState } from "./vocabulary";
 
@@ -26,7 +27,8 @@ export function denyQuote({ payerSeated, payerName, standing, lines, goodUntil, 
 export function denyAgree(quote: QuoteFacts, today: string): Denial | null {
   if (quote.state === "voided") return notYet(`Quote ${quote.number} was voided.`);
   if (quote.state !== "given") return notYet(`Quote ${quote.number} is agreed already.`);
-  return hasLapsed(quote.goodUntil, today) ? notYet(`Quote ${quote.number} was good until ${quote.goodUntil}. Ask the carrier for a new one.`) : null;
+  const { goodUntil } = quote;
+  return goodUntil !== null && hasLapsed(goodUntil, today) ? notYet(`Quote ${quote.number} was good until ${formatDay(goodUntil)}. Ask the carrier for a new one.`) : null;
 }
 
 export function denyVoid(quote: QuoteFacts): Denial | null {

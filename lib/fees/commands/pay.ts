@@ -33,10 +33,9 @@ async function begin(viewer: Viewer, input: QuoteStep, attempt: Attempt): Promis
     const leg = await requireLeg(ctx.tx, ctx.move.id, quote.legId);
     const paymentId = newId("payment");
     const number = before.length + 1;
-    await ctx.tx.insert(payments).values({
-      id: paymentId, moveId: ctx.move.id, quoteId: quote.id, attempt: number, amountCents: quote.totalCents,
-      begunBy: viewer.userId, begunAt: ctx.at, expiresAt: new Date(ctx.at.getTime() + PAGE_MINUTES * 60_000),
-    });
+    // The page lives by the clock of the payment service, also where a step is entered with an earlier date.
+    const expiresAt = new Date(Math.max(ctx.at.getTime(), Date.now()) + PAGE_MINUTES * 60_000);
+    await ctx.tx.insert(payments).values({ id: paymentId, moveId: ctx.move.id, quoteId: quote.id, attempt: number, amountCents: quote.totalCents, begunBy: viewer.userId, begunAt: ctx.at, expiresAt });
     await ctx.append({ kind: "payment.begun", legId: leg.id, detail: { paymentId, quoteId: quote.id, number: quote.number, attempt: number, carrier: leg.carrierName, amountCents: quote.totalCents } });
     return { paymentId };
   });

@@ -1,16 +1,16 @@
 import "server-only";
 import { and, count, eq, inArray, isNull, ne } from "drizzle-orm";
 import type { Tx } from "@/db/client";
-import { billingClearances, companies, feeLines, legs, moveSeats, payments, quotes } from "@/db/schema";
+import { billingClearances, companies, feeLines, type legs, moveSeats, payments, quotes } from "@/db/schema";
 import { maySeeFees } from "@/lib/access/policy";
 import { env } from "@/lib/env";
 import { AppError, refuse } from "@/lib/errors";
 import { newId } from "@/lib/ids";
+import { dayAt, formatDay } from "@/lib/moves/when";
 import { putTask } from "@/lib/outbox/commands";
 import { routes } from "@/lib/routes";
 import { allowOnLeg, peopleIn, requireLeg, writeOnMove, type MoveWrite } from "@/lib/standing/commands";
 import type { Attempt, Viewer } from "@/lib/viewer/types";
-import { dayAt } from "../day";
 import type { ClearBilling, GiveQuote, QuoteStep, VoidQuote } from "../input";
 import { formatMoney, sumCents } from "../money";
 import { unsafeCaseHead } from "../queries";
@@ -23,7 +23,7 @@ export async function giveQuote(viewer: Viewer, input: GiveQuote, attempt: Attem
     const { leg, enteredFor } = await allowOnLeg(ctx, "fee.quote", input.legId, input.enteredFor);
     const payerCompanyId = await seatedPayer(ctx, leg);
     const standing = await standingQuote(ctx.tx, leg.id);
-    refuse(denyQuote({ payerSeated: payerCompanyId !== null, payerName: leg.payerName, standing, lines: input.lines, goodUntil: input.goodUntil, today: dayAt(ctx.at, leg.fromZone) }));
+    refuse(denyQuote({ payerSeated: payerCompanyId !== null, payerName: leg.payerName, standing, lines: input.lines, goodUntil: input.goodUntil, today: dayAt(ctx.at.toISOString(), leg.fromZone) }));
     if (payerCompanyId === null) throw new AppError("not_yet", "Name and invite the payer first.");
     const [before] = await ctx.tx.select({ n: count() }).from(quotes).where(eq(quotes.legId, leg.id));
     const quoteId = newId("quote");
@@ -46,7 +46,7 @@ export async function agreeQuote(viewer: Viewer, input: QuoteStep, attempt: Atte
     const quote = await requireQuote(ctx, input.quoteId);
     ctx.allow({ action: "fee.agree", legId: quote.legId });
     const leg = await requireLeg(ctx.tx, ctx.move.id, quote.legId);
-    refuse(denyAgree(quote, dayAt(ctx.at, leg.fromZone)));
+    refuse(denyAgree(quote, dayAt(ctx.at.toISOString(), leg.fromZone)));
     await ctx.tx.update(quotes).set({ state: "agreed", agreedBy: viewer.userId, agreedAt: ctx.at, version: quote.version + 1 }).where(eq(quotes.id, quote.id));
     await ctx.append({ kind: "quote.agreed", legId: leg.id, detail: { quoteId: quote.id, number: quote.number, carrier: leg.carrierName, totalCents: quote.totalCents } });
     return { quoteId: quote.id };
@@ -115,7 +115,7 @@ async function tellPayer(ctx: MoveWrite, leg: Leg, quote: Given) {
     lines: [
       `Leg ${leg.seq}, ${leg.fromPlace} to ${leg.toPlace}, quote ${quote.number}, to be paid by ${payer?.name ?? leg.payerName ?? "the payer"}.`,
       ...quote.lines.map((line) => `${FEE_LABELS[line.kind]}, ${line.description}: ${formatMoney(line.amountCents)}`),
-      ...(quote.goodUntil ? [`Good until ${quote.goodUntil}.`] : []),
+      ...(quote.goodUntil ? [`Good until ${formatDay(quote.goodUntil)}.`] : []),
     ],
     actionLabel: "Look at the quote",
     url: `${env().APP_URL}${routes.fees(ctx.move.id)}`,

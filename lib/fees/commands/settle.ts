@@ -5,12 +5,13 @@ import { billingClearances, companies, feeLines, ledgerPostings, legs, moves, pa
 import { env } from "@/lib/env";
 import { AppError } from "@/lib/errors";
 import { newId, sha256Hex } from "@/lib/ids";
+import { formatFullWhen } from "@/lib/moves/when";
 import { putMail } from "@/lib/outbox/commands";
 import type { Receipt } from "@/lib/outbox/types";
 import { appendRecord, type NewEntry, type Speaker } from "@/lib/record/commands";
 import { routes } from "@/lib/routes";
 import { peopleIn, refreshStanding, write } from "@/lib/standing/commands";
-import { decide, isDecline, isMoneyBack, isWaiting, mismatchOf, type Checkout, type Decision, type PaymentNotice } from "../checkout";
+import { decide, decideWithout, isDecline, isMoneyBack, isWaiting, mismatchOf, type Checkout, type Decision, type PaymentNotice } from "../checkout";
 import { postingsOfLate, postingsOfPaid, type Posting } from "../ledger";
 import { formatMoney } from "../money";
 import { unsafeCaseHead } from "../queries";
@@ -34,9 +35,9 @@ export async function unsafeSettle(payment: { id: string; moveId: string }, lear
     const decision = judge(found, move.state === "open", learned);
     await flagOnce(tx, found, decision, at);
     await tx.insert(paymentEvents).values({ eventId: learned.eventId, type: learned.type, paymentId: payment.id, outcome: decision.outcome, flagged: decision.flagged, at });
-    if (isDecline(learned.type) && isWaiting(found.payment.state)) await note(tx, found, "payment.failed", { why: "declined" }, at);
+    if (isDecline(learned.type) && isWaiting(found.payment.state)) await note(tx, found, "payment.failed", { why: decision.outcome }, at);
     if (decision.to === null) return;
-    await apply(tx, found, decision.to, learned.page, at);
+    await apply(tx, found, decision.to, decision.outcome, learned.page, at);
     await refreshStanding(tx, payment.moveId, at);
   });
 }
@@ -49,7 +50,7 @@ async function findRows(tx: Tx, paymentId: string): Promise<Found> {
 }
 
 function judge({ payment, quote }: Found, moveOpen: boolean, { type, page, told }: Learned): Decision {
-  if (page === null) return isWaiting(payment.state) ? { to: type === "refused" ? "failed" : "expired", outcome: type === "refused" ? "The payment service refused to open a page." : "No payment page was opened in time.", flagged: false } : { to: null, outcome: "Had ended before.", flagged: false };
+  if (page === null) return decideWithout(payment.state, type === "refused");
   const lie = told && mismatchOf(payment, told);
   if (lie) return { to: null, outcome: `Not booked: the notice does not fit. ${lie}`, flagged: true };
   const decision = decide(payment, quote.state, moveOpen, page);
@@ -69,13 +70,13 @@ async function note(tx: Tx, { payment, quote, leg }: Found, kind: NewEntry["kind
   await appendRecord(tx, payment.moveId, SERVICE, { kind, legId: leg.id, detail }, at);
 }
 
-async function apply(tx: Tx, found: Found, to: PaymentState, page: Checkout | null, at: Date) {
+async function apply(tx: Tx, found: Found, to: PaymentState, why: string, page: Checkout | null, at: Date) {
   const { payment } = found;
   const settled = to === "paid" || to === "late";
   await tx.update(payments).set({ state: to, sessionUrl: null, ...(page && { sessionId: page.sessionId, intentId: page.intentId }), ...(settled && { paidAt: at }) }).where(eq(payments.id, payment.id));
   if (to === "paid") return bookPaid(tx, found, at);
   if (to === "late") return post(tx, found, postingsOfLate(payment.id, payment.amountCents), at);
-  await note(tx, found, "payment.failed", { why: to === "expired" ? "expired" : "refused" }, at);
+  await note(tx, found, "payment.failed", { why }, at);
 }
 
 async function bookPaid(tx: Tx, found: Found, at: Date) {
@@ -100,12 +101,11 @@ async function post(tx: Tx, { payment, leg }: Found, postings: Posting[], at: Da
 async function mailReceipt(tx: Tx, { payment, quote, leg }: Found, at: Date) {
   const lines = await tx.select().from(feeLines).where(eq(feeLines.quoteId, quote.id)).orderBy(feeLines.order);
   const [payer] = await tx.select({ name: companies.name }).from(companies).where(eq(companies.id, quote.payerCompanyId));
-  const paidOn = new Intl.DateTimeFormat("en-US", { timeZone: leg.fromZone, dateStyle: "long", timeStyle: "short" }).format(at);
   const receipt: Receipt = {
     ...(await unsafeCaseHead(tx, payment.moveId)),
     payer: payer?.name ?? leg.payerName ?? "", payee: leg.carrierName,
     lines: lines.map((line) => ({ label: `${FEE_LABELS[line.kind]}, ${line.description}`, amount: formatMoney(line.amountCents) })),
-    total: formatMoney(payment.amountCents), paidOn: `${paidOn} (${leg.fromZone})`,
+    total: formatMoney(payment.amountCents), paidOn: formatFullWhen(at.toISOString(), leg.fromZone),
     reference: [quote.reference ?? `Quote ${quote.number}`, payment.id].join(", "),
     url: `${env().APP_URL}${routes.fees(payment.moveId)}`,
   };

@@ -91,6 +91,3 @@ export async function stateOf({ moveId, quoteId }: { moveId: string; quoteId: st
   for (const one of postings) sums.set(one.groupId, (sums.get(one.groupId) ?? 0) + one.amountCents);
   return { quote: quote?.state, payments: tries.map((one) => one.state), tries, postings, unbalanced: [...sums.values()].filter((sum) => sum !== 0), cleared, receipts: mails.filter((mail) => mail.kind === "receipt"), entries, events };
 }
-
-/** What one settled payment leaves, exactly once. */
-export const SETTLED = { quote: "paid", unbalanced: [] };

@@ -1,7 +1,7 @@
 import { eq } from "drizzle-orm";
 import { afterAll, beforeEach, expect, it } from "vitest";
 import { db } from "@/db/client";
-import { outbox, payments } from "@/db/schema";
+import { companies, outbox, payments } from "@/db/schema";
 import { unsafeCheckOpenPayments, unsafeCheckPayment } from "@/lib/fees/commands/checks";
 import { payQuote } from "@/lib/fees/commands/pay";
 import { agreeQuote, giveQuote, voidQuote } from "@/lib/fees/commands/quotes";
@@ -94,7 +94,6 @@ it("a payment service that is away costs nothing but the try", async () => {
 
 it("a payee account that the payment service does not know ends the try, and the next one starts anew", async () => {
   const move = await seedAgreed();
-  const { companies } = await import("@/db/schema");
   const carrier = move.clerkA.memberships[0]?.companyId ?? "";
   await db().update(companies).set({ payeeAccount: "acct_unknown" }).where(eq(companies.id, carrier));
   await expect(move.pay()).rejects.toMatchObject({ code: "busy", message: expect.stringContaining("would not open a page") });
@@ -114,7 +113,7 @@ it("a declined card leaves the same page open; the record says so and the next c
   await bench.onPage(url, "decline");
   const declined = await stateOf(move);
   expect(declined).toMatchObject({ quote: "agreed", payments: ["open"], postings: [], receipts: [] });
-  expect(declined.entries.at(-1)).toMatchObject({ kind: "payment.failed", detail: { why: "declined" }, byName: "Payment service" });
+  expect(declined.entries.at(-1)).toMatchObject({ kind: "payment.failed", detail: { why: "The card was declined." }, byName: "Payment service" });
   expect((await getFees(move.payer, move.moveId)).legs[0]?.quote?.payments[0]).toMatchObject({ declines: 1, flags: [] });
   expect((await move.pay()).url).toBe(url);
   await bench.onPage(url, "pay");
@@ -134,7 +133,7 @@ it("a page that ran out ends its payment, and the next try opens another", async
   bench.ahead(61 * MINUTES);
   await bench.events();
   await expect.poll(async () => (await stateOf(move)).payments).toEqual(["expired"]);
-  expect((await stateOf(move)).entries.at(-1)).toMatchObject({ kind: "payment.failed", detail: { why: "expired" } });
+  expect((await stateOf(move)).entries.at(-1)).toMatchObject({ kind: "payment.failed", detail: { why: "The payment page ran out unpaid." } });
   expect((await getFacts(move.owner, move.moveId)).legs[0]?.paymentOpen).toBe(false);
   const second = await move.pay(afterMinutes(62));
   expect(second.url).not.toBe(url);
@@ -227,6 +226,15 @@ it("a second payment of one quote is late, flagged, and stays in clearing", asyn
   expect(after.receipts).toHaveLength(2);
   expect(after.events.filter((event) => event.flagged).length).toBeGreaterThan(0);
   expect(after.entries.filter((entry) => entry.kind === "payment.flagged")).toHaveLength(1);
+});
+
+it("a try that is entered with an earlier date has a page that can still be paid", async () => {
+  const move = await seedAgreed();
+  const { url, paymentId } = await move.pay(afterMinutes(-11 * 24 * 60));
+  await bench.fault({ kind: "webhook-never" });
+  await bench.onPage(url, "pay");
+  await unsafeCheckPayment(paymentId, afterMinutes(-11 * 24 * 60));
+  expect(await stateOf(move)).toMatchObject({ quote: "paid", payments: ["paid"] });
 });
 
 it("paying needs an agreed quote, and the payer's or owner's part on that leg", async () => {

@@ -70,7 +70,7 @@ it("a quote that lapsed is not agreed to", async () => {
   const move = await seedMove();
   const { quoteId } = await giveQuote(move.clerkA, aQuote(move, { goodUntil: "2099-01-01" }), anAttempt());
   const later = anAttempt({ at: new Date("2099-01-02T18:00:00Z") });
-  await expect(agreeQuote(move.payer, { moveId: move.moveId, quoteId }, later)).rejects.toMatchObject({ message: expect.stringContaining("good until 2099-01-01") });
+  await expect(agreeQuote(move.payer, { moveId: move.moveId, quoteId }, later)).rejects.toMatchObject({ message: expect.stringContaining("good until 1 Jan 2099") });
   // Still the last day where the leg begins.
   await agreeQuote(move.payer, { moveId: move.moveId, quoteId }, anAttempt({ at: new Date("2099-01-02T05:00:00Z") }));
 });

@@ -61,7 +61,7 @@ describe("steps of a quote", () => {
 
   it("is agreed until its last day, that day included", () => {
     expect(denyAgree({ ...quote, state: "given" }, "2026-11-24")).toBeNull();
-    expect(denyAgree({ ...quote, state: "given" }, "2026-11-25")?.message).toContain("good until 2026-11-24");
+    expect(denyAgree({ ...quote, state: "given" }, "2026-11-25")?.message).toContain("good until 24 Nov 2026");
     expect(denyAgree({ ...quote, goodUntil: null, state: "given" }, "2099-01-01")).toBeNull();
     for (const state of ["agreed", "paid", "voided"] as const) expect(denyAgree({ ...quote, state }, "2026-11-24")).not.toBeNull();
   });

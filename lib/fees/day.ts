@@ -1,2 +1,0 @@
-/** The calendar day at a place, as 2026-11-24. */
-export const dayAt = (at: Date, zone: string) => new Intl.DateTimeFormat("en-CA", { timeZone: zone, year: "numeric", month: "2-digit", day: "2-digit" }).format(at);
