@@ -1,0 +1,5 @@
+import { endSession } from "@/lib/account/commands/own";
+import { endSessionInput } from "@/lib/account/input";
+import { command } from "@/lib/entry/command";
+
+export const DELETE = command(endSessionInput, endSession);
