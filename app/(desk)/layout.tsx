@@ -3,6 +3,7 @@ import { redirect } from "next/navigation";
 import { type ReactNode } from "react";
 import { Providers } from "@/app/providers";
 import { SignOutButton } from "@/components/account/sign-out-button";
+import { UploadQueue } from "@/components/evidence/upload-queue";
 import { Footer } from "@/components/shell/footer";
 import { SkipLink } from "@/components/shell/page";
 import { TopBar } from "@/components/shell/top-bar";
@@ -24,6 +25,7 @@ export default async function DeskLayout({ children }: { children: ReactNode }) 
       <TopBar homeHref={routes.moves()} nav={viewer.siteAdmin ? [...NAV, ADMIN] : NAV} person={<PersonLink name={viewer.name} companies={viewer.memberships.map((one) => one.companyName)} />}>
         <SignOutButton action={signOut} />
       </TopBar>
+      <UploadQueue userId={viewer.userId} />
       {children}
       <Footer />
     </Providers>

@@ -8,7 +8,12 @@ import { serviceSettings } from "./settings";
 
 let known: UTApi | undefined;
 
-const api = () => (known ??= new UTApi(serviceSettings()));
+const CALL_MS = 60_000;
+
+/** The library waits for ever; a worker that waits for ever sends no mail. */
+const bounded: typeof fetch = (input, init) => fetch(input, { ...init, signal: AbortSignal.any([AbortSignal.timeout(CALL_MS), ...(init?.signal ? [init.signal] : [])]) });
+
+const api = () => (known ??= new UTApi({ ...serviceSettings(), fetch: bounded }));
 
 /** How long an address to a private file is good. Long enough to load a picture, too short to pass on. */
 export const READ_SECONDS = 60;

@@ -43,24 +43,28 @@ async function note(photoId: string, slot: Slot, key: string, now: Date): Promis
   });
 }
 
-/** No viewer: asks the file service for files of one photo whose arrival was not reported, and notes them as a report would have. A service that is away changes nothing. */
-export async function unsafeSettlePhoto(photoId: string, now: Date): Promise<void> {
+/** No viewer: asks the file service for files of one photo whose arrival was not reported, and notes them as a report would have. A service that is away changes nothing; false then. */
+export async function unsafeSettlePhoto(photoId: string, now: Date): Promise<boolean> {
   const [photo] = await db().select({ state: photos.state, proofKey: photos.proofKey, originalKey: photos.originalKey }).from(photos).where(eq(photos.id, photoId));
-  if (!photo || photo.state === "kept" || photo.state === "refused") return;
-  for (const slot of ["proof", "original"] as const) {
-    if (slot === "proof" ? photo.proofKey : photo.originalKey) continue;
-    try {
-      const key = await findKey(fileIdOf(photoId, slot));
+  if (!photo || photo.state === "kept" || photo.state === "refused") return true;
+  try {
+    for (const slot of ["proof", "original"] as const) {
+      const key = (slot === "proof" ? photo.proofKey : photo.originalKey) ? null : await findKey(fileIdOf(photoId, slot));
       if (key) await unsafeStoreFile(photoId, slot, { key }, now);
-    } catch (error) {
-      console.warn("file service not asked", photoId, slot, error instanceof Error ? error.message : error);
     }
+    return true;
+  } catch (error) {
+    console.warn("file service not asked", photoId, error instanceof Error ? error.message : error);
+    return false;
   }
 }
 
 /** No viewer: the worker's round, once a minute. Looks for files that arrived unreported, and has originals checked whose check was given up while a service was down. */
 export async function unsafeSweepPhotos(now: Date): Promise<void> {
-  for (const { id } of await unsafeMissingFiles(now)) await unsafeSettlePhoto(id, now);
+  for (const { id } of await unsafeMissingFiles(now)) {
+    // A service that is away for one photo is away for all, and the worker has mail to send.
+    if (!(await unsafeSettlePhoto(id, now))) break;
+  }
   const hour = now.toISOString().slice(0, 13);
   for (const { id, moveId } of await unsafeUnchecked(now)) {
     await db().transaction((tx) => putTask(tx, { kind: "check-photo", payload: { photoId: id }, dedupe: `check-photo:${id}:${hour}`, moveId }, now));
