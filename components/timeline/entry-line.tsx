@@ -2,12 +2,9 @@ import Link from "next/link";
 import { TimelineEntry } from "@/components/drawing/timeline-rail";
 import { Disclosure } from "@/components/ui/disclosure";
 import { State } from "@/components/ui/state";
-import { toWall, zoneName } from "@/lib/moves/when";
 import type { Entry } from "@/lib/timeline/types";
 import { byWords, enteredWords, many } from "@/lib/timeline/words";
-
-/** The clock of a place, with its zone. */
-export const clockAt = (iso: string, zone: string) => `${toWall(iso, zone).slice(11)} ${zoneName(zone, new Date(iso))}`;
+import { clockAt } from "./day-words";
 
 function Words({ entry: { parts, link } }: { entry: Entry }) {
   return parts.map(({ text, strong }, at) =>

@@ -5,7 +5,7 @@ import { AppError, refuse } from "@/lib/errors";
 import { env } from "@/lib/env";
 import { linkPhotos } from "@/lib/evidence/commands";
 import { newId } from "@/lib/ids";
-import { formatWhen, toUtc } from "@/lib/moves/when";
+import { dayAt, formatWhen, toUtc } from "@/lib/moves/when";
 import { openRestore } from "@/lib/prep/commands";
 import { keepSignature } from "@/lib/record/commands";
 import { routes } from "@/lib/routes";
@@ -16,7 +16,7 @@ import type { LegFacts, MoveFacts } from "@/lib/standing/types";
 import { EVENT_CODES } from "./event-codes";
 import type { Attempt, Viewer } from "@/lib/viewer/types";
 import type { CloseMove, GiveInstruction, MakeSighting, RecordArrival, ReleaseUnit, RetractSighting, WithdrawInstruction } from "./input";
-import { arrivalStatement, closingStatement, denyRetraction, denySighting, denyTime, releaseStatement } from "./rules";
+import { arrivalStatement, closingStatement, denyArrivalDay, denyAsReceiver, denyRetraction, denySighting, denyTime, releaseStatement } from "./rules";
 
 async function unitOf(ctx: MoveWrite): Promise<string> {
   const [unit] = await ctx.tx.select({ mark: equipment.mark, number: equipment.number }).from(equipment).where(eq(equipment.moveId, ctx.move.id));
@@ -95,15 +95,17 @@ export async function makeSighting(viewer: Viewer, input: MakeSighting, attempt:
     const { leg, enteredFor } = await allowOnLeg(ctx, "movement.sight", input.legId, input.enteredFor);
     const occurredAt = momentOf(input);
     refuse(denyTime(occurredAt, ctx.at));
-    if (input.corrects) await retract(ctx, input.corrects, leg.id, "Corrected by a newer sighting");
+    const replaced = input.corrects ? await retract(ctx, { sightingId: input.corrects, legId: leg.id, why: "Corrected by a newer sighting", replacedBy: input.kind }) : null;
     const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
-    refuse(denySighting(facts, legOf(facts, leg.id), input.kind));
+    const now = legOf(facts, leg.id);
+    if (!enteredFor) refuse(denyAsReceiver(ctx.parts, facts, now, input.kind));
+    if (replaced?.kind !== input.kind) refuse(denySighting(facts, now, input.kind));
     const id = newId("sighting");
     const { kind, place, zone, train, note, corrects } = input;
     await ctx.tx.insert(sightings).values({ id, moveId: ctx.move.id, legId: leg.id, kind, place, zone, occurredAt, train, note, byUserId: viewer.userId, byName: viewer.name, enteredFor, at: ctx.at, corrects });
     await linkPhotos(ctx, input.photoIds, "sighting", id);
     const entry = await ctx.append({ kind: "sighting.made", legId: leg.id, enteredFor, detail: { sightingId: id, sighting: kind, place, zone, occurredAt: occurredAt.toISOString(), carrier: leg.carrierName, train, corrects } });
-    await tellSighting(ctx, { kind, place, zone, occurredAt, carrier: leg.carrierName, seq: leg.seq }, facts, entry);
+    await tellSighting(ctx, { kind, place, zone, occurredAt, carrier: leg.carrierName, seq: leg.seq, corrects }, facts, entry);
     return { sightingId: id };
   });
 }
@@ -117,26 +119,28 @@ function momentOf({ occurredAt, zone }: Pick<MakeSighting, "occurredAt" | "zone"
   }
 }
 
-type Told = { kind: MakeSighting["kind"]; place: string; zone: string; occurredAt: Date; carrier: string; seq: number };
+type Told = { kind: MakeSighting["kind"]; place: string; zone: string; occurredAt: Date; carrier: string; seq: number; corrects: string | null };
 
 async function tellSighting(ctx: MoveWrite, told: Told, facts: MoveFacts, entry: string) {
   const unit = await unitOf(ctx);
   const label = EVENT_CODES[told.kind].label;
-  const news = newsOf(ctx, unit, `${label} at ${told.place}`, [`${told.carrier}, ${formatWhen(told.occurredAt.toISOString(), told.zone)}.`]);
+  const news = newsOf(ctx, unit, `${told.corrects ? "Corrected: " : ""}${label} at ${told.place}`, [`${told.carrier}, ${formatWhen(told.occurredAt.toISOString(), told.zone)}.`]);
   await ctx.tell({ part: "owner" }, "movement", news, entry);
   const next = facts.legs.find((leg) => leg.seq === told.seq + 1);
   if (told.kind === "delivered" && next) await ctx.tell({ part: "desk", legId: next.legId }, "movement", news, entry);
   if (["at-destination", "notified", "placed"].includes(told.kind)) await ctx.tell({ part: "receiver" }, "movement", news, entry);
 }
 
-async function retract(ctx: MoveWrite, sightingId: string, legId: string | null, why: string) {
+type Retraction = { sightingId: string; legId: string; why: string; replacedBy?: MakeSighting["kind"] };
+
+async function retract(ctx: MoveWrite, { sightingId, legId, why, replacedBy }: Retraction) {
   const all = await ctx.tx.select({ id: sightings.id, legId: sightings.legId, kind: sightings.kind, place: sightings.place, retractedAt: sightings.retractedAt, legSeq: legs.seq }).from(sightings)
     .innerJoin(legs, eq(legs.id, sightings.legId)).where(eq(sightings.moveId, ctx.move.id));
   const said = all.find((one) => one.id === sightingId);
-  if (!said || (legId && said.legId !== legId)) throw new AppError("not_found", "No such sighting on this leg.");
+  if (!said || said.legId !== legId) throw new AppError("not_found", "No such sighting on this leg.");
   const plain = (one: (typeof all)[number]) => ({ kind: one.kind, legSeq: one.legSeq, retracted: one.retractedAt !== null });
   const [arrival] = await ctx.tx.select({ id: arrivals.id }).from(arrivals).where(eq(arrivals.moveId, ctx.move.id));
-  refuse(denyRetraction(plain(said), all.filter((one) => one.id !== sightingId).map(plain), Boolean(arrival)));
+  refuse(denyRetraction(plain(said), all.filter((one) => one.id !== sightingId).map(plain), Boolean(arrival), replacedBy));
   await ctx.tx.update(sightings).set({ retractedAt: ctx.at, retractedWhy: why }).where(eq(sightings.id, sightingId));
   return said;
 }
@@ -144,10 +148,12 @@ async function retract(ctx: MoveWrite, sightingId: string, legId: string | null,
 /** Takes back a sighting that was wrong; it stays on record as retracted. */
 export async function retractSighting(viewer: Viewer, input: RetractSighting, attempt: Attempt) {
   return writeOnMove(viewer, attempt, input.moveId, async (ctx) => {
-    const [found] = await ctx.tx.select({ legId: sightings.legId }).from(sightings).where(and(eq(sightings.id, input.sightingId), eq(sightings.moveId, ctx.move.id)));
+    const [found] = await ctx.tx.select({ legId: sightings.legId, kind: sightings.kind }).from(sightings).where(and(eq(sightings.id, input.sightingId), eq(sightings.moveId, ctx.move.id)));
     if (!found) throw new AppError("not_found", "No such sighting on this move.");
     const { leg, enteredFor } = await allowOnLeg(ctx, "movement.sight", found.legId, input.enteredFor);
-    const said = await retract(ctx, input.sightingId, leg.id, input.why);
+    const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
+    if (!enteredFor) refuse(denyAsReceiver(ctx.parts, facts, legOf(facts, leg.id), found.kind));
+    const said = await retract(ctx, { sightingId: input.sightingId, legId: leg.id, why: input.why });
     await ctx.append({ kind: "sighting.retracted", legId: leg.id, enteredFor, detail: { sightingId: said.id, sighting: said.kind, place: said.place, why: input.why, carrier: leg.carrierName } });
     return { sightingId: said.id };
   });
@@ -160,6 +166,7 @@ export async function recordArrival(viewer: Viewer, input: RecordArrival, attemp
     const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
     if (facts.arrived) throw new AppError("stale", "The arrival is recorded already.");
     if (!facts.legs.at(-1)?.placed) throw new AppError("not_yet", "The arrival is recorded once the unit has been placed.");
+    refuse(denyArrivalDay(input.arrivedOn, dayAt(ctx.at.toISOString(), ctx.move.destinationZone)));
     const unit = await unitOf(ctx);
     const id = newId("arrival");
     const { arrivedOn, condition, missing } = input;

@@ -18,10 +18,10 @@ const mutation = <V extends Sent>(moveId: string, path: (sent: V) => string) =>
       Promise.all([client.invalidateQueries({ queryKey: movementKeys.ofMove(moveId) }), client.invalidateQueries({ queryKey: moveKeys.case(moveId) })]),
   });
 
-export const giveInstructionMutation = (moveId: string) => mutation(moveId, (_sent: Sent) => routes.api.instructions(moveId));
+export const giveInstructionMutation = (moveId: string) => mutation(moveId, () => routes.api.instructions(moveId));
 export const withdrawInstructionMutation = (moveId: string) => mutation(moveId, ({ instructionId }: Sent & { instructionId: string }) => routes.api.withdrawInstruction(moveId, instructionId));
-export const releaseUnitMutation = (moveId: string) => mutation(moveId, (_sent: Sent) => routes.api.release(moveId));
-export const makeSightingMutation = (moveId: string) => mutation(moveId, (_sent: Sent) => routes.api.sightings(moveId));
+export const releaseUnitMutation = (moveId: string) => mutation(moveId, () => routes.api.release(moveId));
+export const makeSightingMutation = (moveId: string) => mutation(moveId, () => routes.api.sightings(moveId));
 export const retractSightingMutation = (moveId: string) => mutation(moveId, ({ sightingId }: Sent & { sightingId: string }) => routes.api.retractSighting(moveId, sightingId));
-export const recordArrivalMutation = (moveId: string) => mutation(moveId, (_sent: Sent) => routes.api.arrival(moveId));
-export const closeMoveMutation = (moveId: string) => mutation(moveId, (_sent: Sent) => routes.api.closeMove(moveId));
+export const recordArrivalMutation = (moveId: string) => mutation(moveId, () => routes.api.arrival(moveId));
+export const closeMoveMutation = (moveId: string) => mutation(moveId, () => routes.api.closeMove(moveId));

@@ -1,4 +1,6 @@
+import type { HeldPart } from "@/lib/access/types";
 import type { Denial } from "@/lib/errors";
+import { formatDay } from "@/lib/moves/when";
 import { denyTakeOver } from "@/lib/standing/rules";
 import type { LegFacts, MoveFacts } from "@/lib/standing/types";
 import type { SightingKind } from "./vocabulary";
@@ -38,6 +40,27 @@ export function denySighting(move: MoveFacts, leg: LegFacts, kind: SightingKind)
   return { code: "not_yet", message: WHY_NOT[kind] ?? "The unit has left this leg." };
 }
 
+/** What a receiver sees with its own eyes; everything before is the carriers' to say. */
+const AT_ARRIVAL: readonly SightingKind[] = ["at-destination", "notified", "placed", "seen"];
+
+/** Of the kinds that make sense now, those that a receiver may record: at arrival, on the last leg. */
+export const kindsForReceiver = (kinds: readonly SightingKind[], leg: { seq: number }, legs: number) => (leg.seq === legs ? kinds.filter((kind) => AT_ARRIVAL.includes(kind)) : []);
+
+/** True when the viewer speaks for the carrier of the leg. */
+export const speaksForCarrier = (parts: readonly HeldPart[], legId: string) => parts.some((held) => held.part === "desk" && held.legId === legId);
+
+/** Null when somebody who does not speak for the leg's carrier may say this of the unit. */
+export function denyAsReceiver(parts: readonly HeldPart[], move: MoveFacts, leg: LegFacts, kind: SightingKind): Denial | null {
+  if (speaksForCarrier(parts, leg.legId) || (leg.seq === move.legs.length && AT_ARRIVAL.includes(kind))) return null;
+  return { code: "not_your_part", message: "The receiver records what happens at arrival, on the last leg; the rest is the carrier’s to say." };
+}
+
+/** A look at the unit can't lie ahead. Days are those of the destination. */
+export function denyArrivalDay(arrivedOn: string, today: string): Denial | null {
+  if (arrivedOn <= today) return null;
+  return { code: "bad_input", message: "Some entries need another look.", fields: { arrivedOn: [`This lies ahead; today is ${formatDay(today)} at the destination.`] } };
+}
+
 /** A sighting happened; it can't lie ahead. Order on the timeline is by when it happened. */
 export function denyTime(occurredAt: Date, now: Date): Denial | null {
   if (occurredAt.getTime() <= now.getTime() + AHEAD_MINUTES * 60_000) return null;
@@ -46,10 +69,11 @@ export function denyTime(occurredAt: Date, now: Date): Denial | null {
 
 type Said = { kind: SightingKind; legSeq: number; retracted: boolean };
 
-/** Hand-overs that later ones stand on can't be retracted before those. */
-export function denyRetraction(said: Said, all: readonly Said[], arrived: boolean): Denial | null {
+/** Hand-overs that later ones stand on can't be retracted before those. A correction of the same kind takes the place of the old one, so nothing loses its ground. */
+export function denyRetraction(said: Said, all: readonly Said[], arrived: boolean, replacedBy: SightingKind | null = null): Denial | null {
   if (said.retracted) return { code: "stale", message: "This sighting is retracted already." };
   if (arrived) return { code: "not_yet", message: "The arrival is recorded; sightings before it stay as they are." };
+  if (replacedBy === said.kind) return null;
   const standing = all.filter((one) => !one.retracted);
   const missing: string[] = [];
   if (said.kind === "pulled" || said.kind === "received") {

@@ -30,6 +30,7 @@ export type InstructionView = {
   train: string | null;
   pickupFrom: string | null;
   text: string | null;
+  byName: string;
   enteredFor: EnteredFor | null;
   at: string;
 };
@@ -53,9 +54,12 @@ export type MovementLeg = {
   delivered: boolean;
   /** Restrictions of the standing acceptance, in words. */
   restrictions: string[];
-  /** Kinds that may be recorded now, in the order in which they usually come. */
+  /** Last day of the standing acceptance, where the inspector named one. */
+  validUntil: string | null;
+  /** Kinds that the viewer may record now, in the order in which they usually come. */
   kinds: SightingKind[];
-  may: { instruct: boolean; sight: boolean; release: boolean; enterFor: boolean };
+  /** `enterFor`: by entering what the absent carrier told. `asReceiver`: what the viewer saw as the receiver. */
+  may: { instruct: boolean; sight: boolean; release: boolean; enterFor: boolean; asReceiver: boolean };
 };
 
 export type ArrivalView = { arrivedOn: string; condition: string; missing: string | null; byName: string; signedAs: string; at: string; photos: PhotoView[] };
@@ -64,10 +68,14 @@ export type Movement = {
   unit: string;
   legs: MovementLeg[];
   sightings: SightingView[];
+  /** Null as well for those who may not read what was found; `arrived` says that it was recorded. */
   arrival: ArrivalView | null;
+  arrived: boolean;
   destination: { name: string; place: string; zone: string };
   placed: boolean;
   restore: { total: number; left: number };
   closing: { may: boolean; missing: string[]; closedAt: string | null };
   may: { arrive: boolean };
+  /** When this was read; days are counted to here. */
+  at: string;
 };

@@ -62,15 +62,16 @@ export async function getTimeline(viewer: Viewer, moveId: string, show: number, 
 const TOKEN = /^[\w-]{16,64}$/;
 
 /** No viewer: whoever holds the link is a notify party. Null alike for a link that never was, was ended, or has run out. */
-export async function unsafeFollow(token: string, now: Date): Promise<{ followId: string; view: FollowView } | null> {
+export async function unsafeFollow(token: string, now: Date): Promise<{ followId: string; lastUsedAt: Date | null; view: FollowView } | null> {
   if (!TOKEN.test(token)) return null;
-  const [link] = await db().select({ id: followLinks.id, moveId: followLinks.moveId, expiresAt: followLinks.expiresAt }).from(followLinks)
+  const [link] = await db().select({ id: followLinks.id, moveId: followLinks.moveId, expiresAt: followLinks.expiresAt, lastUsedAt: followLinks.lastUsedAt }).from(followLinks)
     .where(and(eq(followLinks.tokenHash, sha256Hex(token)), isNull(followLinks.revokedAt), gt(followLinks.expiresAt, now)));
   if (!link) return null;
   const head = await headOf(link.moveId);
   const facts = await unsafeGatherFacts(db(), link.moveId);
   return {
     followId: link.id,
+    lastUsedAt: link.lastUsedAt,
     view: {
       unit: { mark: head.mark, number: head.number, shape: BODY_SHAPES.find((one) => one === head.shape) ?? "hood", axles: AXLES.find((one) => one === head.axles) ?? 6 },
       caseNumber: head.caseNumber,

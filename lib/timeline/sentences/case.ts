@@ -11,16 +11,16 @@ const partWords = (detail: Detail) => {
 
 const companyOf = (detail: Detail) => textOf(detail, "company", "companyName", "carrier", "carrierName");
 
-/** Whom it concerns: the company, and in which part. */
+/** Whom it concerns: the person where one is named, the company, and in which part. */
 function whom(detail: Detail): string {
-  const company = companyOf(detail);
-  const part = partWords(detail);
-  if (company && part) return `${company} as ${part}`;
-  return company ?? (part ? `a ${part}` : "a company");
+  const [company, part, name] = [companyOf(detail), partWords(detail), textOf(detail, "name")];
+  const who = company ? (name ? `${name} of ${company}` : company) : name;
+  if (who && part) return `${who} as ${part}`;
+  return who ?? (part ? `a ${part}` : "a company");
 }
 
 const legWords = (detail: Detail) => {
-  const seq = numberOf(detail, "seq", "leg");
+  const seq = numberOf(detail, "seq", "legSeq");
   return seq === null ? "" : ` of leg ${seq}`;
 };
 
@@ -36,8 +36,8 @@ export const CASE_SENTENCES = {
   "move.cancelled": toAll("Cancelled the move", (d) => sentence(say(strong("Cancelled the move")), { note: textOf(d, "reason", "why"), state: { tone: "oxide", word: "Cancelled" } })),
   "equipment.changed": { area: "unit", ...toAll("Changed the unit’s facts", (d) => sentence(say("Changed the ", strong("unit’s facts")), { note: changed(d) }), "unit") },
   "leg.changed": toAll("Changed the route", (d) => sentence(say("Changed the route", legWords(d), companyOf(d) ? `, ${companyOf(d)}` : null), { note: changed(d) }), "unit"),
-  "party.invited": toAll("Invited a company", (d) => sentence(say("Invited ", strong(whom(d)))), "people"),
-  "party.joined": toAll("Joined the move", (d) => sentence(say("Joined the move", partWords(d) ? ` as ${partWords(d)}` : null, companyOf(d) ? ` for ${companyOf(d)}` : null)), "people"),
+  "party.invited": toAll("Invited a company", (d) => sentence(say(d.again === true ? "Sent a new invitation to " : "Invited ", strong(whom(d)), legWords(d))), "people"),
+  "party.joined": toAll("Joined the move", (d) => sentence(say(companyOf(d) && strong(companyOf(d) ?? ""), companyOf(d) ? " joined the move" : "Joined the move", partWords(d) && ` as ${partWords(d)}`, legWords(d))), "people"),
   "party.removed": toAll("Removed a company from the move", (d) => sentence(say("Removed ", strong(whom(d)), " from the move"), { note: textOf(d, "why", "reason") }), "people"),
   "invitation.revoked": toAll("Withdrew an invitation", (d) => sentence(say("Withdrew the invitation of ", strong(whom(d)))), "people"),
   "carrier.named": toAll("Named a carrier", (d) => sentence(say("Named ", strong(companyOf(d) ?? "a carrier"), legWords(d) ? ` as the carrier${legWords(d)}` : null, textOf(d, "before") && `, in place of ${textOf(d, "before")}`), { note: changed(d) }), "unit"),

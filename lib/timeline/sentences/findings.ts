@@ -15,9 +15,8 @@ const isDay = (text: string | null): text is string => text !== null && /^\d{4}-
 
 /** `F-01` as the findings page shows it. */
 export function findingLabel(detail: Detail): string {
-  const label = textOf(detail, "label", "finding");
   const number = numberOf(detail, "number");
-  return label ?? (number === null ? "a finding" : `F-${String(number).padStart(2, "0")}`);
+  return number === null ? (textOf(detail, "label", "number") ?? "a finding") : `F-${String(number).padStart(2, "0")}`;
 }
 
 const finding = (detail: Detail) => strong(findingLabel(detail));
@@ -45,8 +44,9 @@ function visit(detail: Detail) {
 function acceptance(detail: Detail) {
   const [carrier, number] = [textOf(detail, "carrier", "carrierName"), textOf(detail, "number", "acceptanceNumber")];
   const limits = textsOf(detail, "restrictions").map((id) => RESTRICTIONS.find((one) => one.id === id)?.label ?? id);
+  const note = textOf(detail, "restrictionNote");
   const until = textOf(detail, "validUntil");
-  return sentence(say(strong("Accepted"), carrier && ` by ${carrier}`, number && `, no. ${number}`, isDay(until) && `, good until ${formatDay(until)}`), { note: limits.join(", ") || null, state: { tone: "verdigris", word: "Accepted" } });
+  return sentence(say(strong("Accepted"), carrier && ` by ${carrier}`, number && `, no. ${number}`, isDay(until) && `, good until ${formatDay(until)}`), { note: [...limits, note].filter(Boolean).join(", ") || null, state: { tone: "verdigris", word: "Accepted" } });
 }
 
 const told = (plain: string, tell: Told["tell"]): Told => ({ area: "findings", place: "findings", plain, tell });
