@@ -36,6 +36,7 @@ export const routes = {
   unit: (moveId: string) => `${move(moveId)}/unit`,
   account: () => "/account",
   companies: () => "/account/companies",
+  newCompany: () => "/account/companies/new",
   company: (companyId: string) => `/account/companies/${companyId}`,
   admin: () => "/admin",
   adminMail: () => "/admin/mail",
