@@ -3,7 +3,7 @@ import { Box, BoxGrid } from "@/components/ui/box";
 import { LinkButton, TextLink } from "@/components/ui/link-button";
 import { State } from "@/components/ui/state";
 import type { FeeLeg } from "@/lib/fees/types";
-import { legWords } from "@/lib/fees/words";
+import { legWords, quoteBar } from "@/lib/fees/words";
 import { formatWhen } from "@/lib/moves/when";
 import { routes } from "@/lib/routes";
 import { AgreeDialog } from "./agree-dialog";
@@ -13,7 +13,7 @@ import { QuotePart, VoidedQuotes } from "./quote-part";
 
 /** The money of one leg: who asks whom, the quote that stands, and the steps that the viewer may take. */
 export function LegFees({ moveId, leg }: { moveId: string; leg: FeeLeg }) {
-  const { word, tone, next } = legWords(leg);
+  const { word, tone, who, next } = legWords(leg);
   const settled = tone === "verdigris";
   return (
     <section aria-labelledby={`fees-${leg.legId}`} className="border-2 border-rule-strong">
@@ -26,7 +26,7 @@ export function LegFees({ moveId, leg }: { moveId: string; leg: FeeLeg }) {
       <BoxGrid framed={false}>
         <Box label="Paid to" detail={`${leg.fromPlace} to ${leg.toPlace}`} span={4}>{leg.carrierName}{leg.carrierMark ? ` (${leg.carrierMark})` : ""}</Box>
         <Box label="Paid by" detail={leg.payerName && !leg.payerSeated ? "named, not invited yet" : null} span={4}>{leg.payerName ?? "Nobody named yet"}</Box>
-        <Box label="Now" detail={next} span={4} {...(settled ? {} : { tone: tone === "oxide" ? ("wrong" as const) : ("waiting" as const) })}>{word}</Box>
+        <Box label={settled ? "Settled" : "Waiting on"} detail={next} span={4} {...(settled ? {} : { tone: tone === "oxide" ? ("wrong" as const) : ("waiting" as const) })}>{who}</Box>
       </BoxGrid>
       <div className="grid gap-5 border-t border-rule px-3.5 py-4">
         {leg.quote ? <QuotePart quote={leg.quote} zone={leg.fromZone} /> : <NoQuote moveId={moveId} leg={leg} />}
@@ -41,7 +41,8 @@ export function LegFees({ moveId, leg }: { moveId: string; leg: FeeLeg }) {
 function NoQuote({ moveId, leg }: { moveId: string; leg: FeeLeg }) {
   return (
     <p className="max-w-[66ch] text-14">
-      No quote yet. {legWords(leg).next} {!leg.payerSeated && <TextLink href={routes.people(moveId)}>People on this move</TextLink>}
+      No quote yet. {leg.payerSeated ? "What the carrier asks for this leg stands here once its billing clerk has given it." : quoteBar(leg)}{" "}
+      {!leg.payerSeated && <TextLink href={routes.people(moveId)}>People on this move</TextLink>}
     </p>
   );
 }

@@ -16,7 +16,7 @@ export function QuotePart({ quote, zone }: { quote: QuoteView; zone: string }) {
       {quote.note && <p className="max-w-[66ch] text-14 whitespace-pre-line">{quote.note}</p>}
       {quote.enteredFor && <EnteredBy enteredFor={quote.enteredFor} byName={quote.givenBy} />}
       <p className="text-14 text-ink-2">
-        {!quote.enteredFor && `Given by ${quote.givenBy}, ${formatWhen(quote.givenAt, zone)}. `}
+        {quote.enteredFor ? `Entered here ${formatWhen(quote.givenAt, zone)}. ` : `Given by ${quote.givenBy}, ${formatWhen(quote.givenAt, zone)}. `}
         {quote.agreedBy && quote.agreedAt && `Agreed by ${quote.agreedBy}, ${formatWhen(quote.agreedAt, zone)}.`}
       </p>
       {quote.payments.length > 0 && <PaymentList payments={quote.payments} zone={zone} />}

@@ -22,13 +22,11 @@ export function QuoteTable({ quote }: { quote: QuoteView }) {
             <Td mono className="text-right whitespace-nowrap">{formatMoney(line.amountCents)}</Td>
           </tr>
         ))}
-      </tbody>
-      <tfoot>
         <tr>
-          <th scope="row" colSpan={2} className="font-[680]">Total</th>
-          <Td mono className="text-right font-semibold whitespace-nowrap">{formatMoney(quote.totalCents)}</Td>
+          <th scope="row" colSpan={2} className="font-[680]!">Total</th>
+          <Td mono className="text-right font-semibold! whitespace-nowrap">{formatMoney(quote.totalCents)}</Td>
         </tr>
-      </tfoot>
+      </tbody>
     </Table>
   );
 }

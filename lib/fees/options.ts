@@ -11,12 +11,12 @@ export const feeKeys = { ofMove: (moveId: string) => ["fees", moveId] as const }
 export const feesOptions = (moveId: string) =>
   queryOptions({ queryKey: feeKeys.ofMove(moveId), queryFn: ({ signal }) => read<FeesView>(routes.api.fees(moveId), signal), staleTime: 5_000, refetchInterval: 15_000 });
 
-/** One write on fees; each takes the key of one intent, so that pressing twice does it once. Fees and the case's head are read anew. */
+/** One write on fees; each takes the key of one intent, so that pressing twice does it once. Fees and the case's head are read anew, fees also while another page shows, since the form for a quote leads back to them. */
 const mutation = <V extends { key: string }, T>(moveId: string, run: (sent: V) => Promise<T>) =>
   mutationOptions({
     mutationFn: run,
     onSettled: (_data, _error, _sent, _result, { client }) =>
-      Promise.all([client.invalidateQueries({ queryKey: feeKeys.ofMove(moveId) }), client.invalidateQueries({ queryKey: moveKeys.case(moveId) })]),
+      Promise.all([client.invalidateQueries({ queryKey: feeKeys.ofMove(moveId), refetchType: "all" }), client.invalidateQueries({ queryKey: moveKeys.case(moveId) })]),
   });
 
 /** As typed; what is missing or not a word of ours, the server says. */

@@ -33,6 +33,7 @@ export async function getFees(viewer: Viewer, moveId: string, now = new Date()):
     const may = (action: Action) => open && partFor(parts, { action, legId: id }) !== null;
     return {
       legId: id, seq, carrierName, carrierMark, fromPlace, toPlace, fromZone, payerName,
+      payerIsOwner: payerCompanyId === move.ownerCompanyId,
       payerSeated: payerCompanyId === move.ownerCompanyId || payerSeats.some((seat) => seat.legId === id && seat.companyId === payerCompanyId),
       cleared: cleared.find((row) => row.legId === id)?.view ?? null,
       quote, voided: own.filter((one) => one.state === "voided"),
@@ -43,13 +44,6 @@ export async function getFees(viewer: Viewer, moveId: string, now = new Date()):
     };
   });
   return { moveId, open, legs: await Promise.all(shown) };
-}
-
-/** The leg for which the viewer may give or enter a quote; refuses `not_found` otherwise. */
-export async function getLegToQuote(viewer: Viewer, moveId: string, legId: string): Promise<FeeLeg> {
-  const leg = (await getFees(viewer, moveId)).legs.find((one) => one.legId === legId && one.may.quote !== null);
-  if (!leg) throw new AppError("not_found", "No such leg to quote for.");
-  return leg;
 }
 
 const ANY_ENTRY: EnteredFor = { carrierName: "", source: "paper", heardOn: "", saidBy: "", reference: null };

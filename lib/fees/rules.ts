@@ -1,6 +1,7 @@
 import { AppError, type Denial } from "@/lib/errors";
 import { formatDay } from "@/lib/moves/when";
 import { LEAST_CENTS, MOST_CENTS, sumCents } from "./money";
+import type { FeeLeg, FeesView } from "./types";
 import type { QuoteState } from "./vocabulary";
 
 const notYet = (message: string, missing?: string[]): Denial => ({ code: "not_yet", message, ...(missing && { missing }) });
@@ -47,3 +48,10 @@ export const denyClearance = (cleared: boolean): Denial | null => (cleared ? not
 
 export const serviceAway = (cause: unknown) =>
   new AppError("busy", "The payment service can’t be reached at the moment. Nothing was charged; try again in a minute.", { cause, retryAfterSeconds: 30 });
+
+/** The leg for which the viewer may give or enter a quote; refuses `not_found` otherwise. */
+export function requireLegToQuote(fees: FeesView, legId: string): FeeLeg {
+  const leg = fees.legs.find((one) => one.legId === legId && one.may.quote !== null);
+  if (!leg) throw new AppError("not_found", "No such leg to quote for.");
+  return leg;
+}

@@ -34,6 +34,7 @@ export type FeeLeg = {
   payerName: string | null;
   /** Whether the named payer is a company here; a quote needs one. */
   payerSeated: boolean;
+  payerIsOwner: boolean;
   cleared: ClearanceView | null;
   /** The one that stands, if any. */
   quote: QuoteView | null;

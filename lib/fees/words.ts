@@ -4,29 +4,31 @@ import type { FeeLeg, PaymentView } from "./types";
 
 type Tone = "oxide" | "brass" | "verdigris" | "slate" | "neutral";
 
-/** Where the money of a leg stands: a word, its tone, and who does what next. */
-export type LegWords = { word: string; tone: Tone; next: string };
+/** Where the money of a leg stands: a word with its tone, whose turn it is, and what they do. */
+export type LegWords = { word: string; tone: Tone; who: string; next: string };
 
-const words = (word: string, tone: Tone, next: string): LegWords => ({ word, tone, next });
+const words = (word: string, tone: Tone, who: string, next: string): LegWords => ({ word, tone, who, next });
 
 const isOpen = ({ state }: PaymentView) => state === "begun" || state === "open";
 
 function beforeQuote({ payerName, payerSeated, carrierName }: FeeLeg): LegWords {
-  if (payerName === null) return words("No payer named", "brass", `The owner says who pays ${carrierName}, then invites them. A quote goes to somebody.`);
-  if (!payerSeated) return words("Payer not invited", "brass", `The owner invites ${payerName}. A quote goes to somebody.`);
-  return words("Waiting for a quote", "brass", `The billing clerk of ${carrierName} gives a quote for this leg; the owner can enter it for a carrier that is not on board.`);
+  if (payerName === null) return words("No payer named", "brass", "The owner", `says who pays ${carrierName} and invites them. A quote needs somebody to go to.`);
+  if (!payerSeated) return words("Payer not invited", "brass", "The owner", `invites ${payerName}. A quote needs somebody to go to.`);
+  return words("Waiting for a quote", "brass", carrierName, "gives a quote for this leg. The owner can enter it for a carrier that is not on board.");
 }
 
 /** Puts the leg's billing into words. */
 export function legWords(leg: FeeLeg): LegWords {
-  const { quote, cleared, carrierName, payerName } = leg;
-  if (quote?.state === "paid") return words("Paid", "verdigris", `${formatMoney(quote.totalCents)} for quote ${quote.number}. Billing is cleared for this leg.`);
-  if (cleared?.how === "credit-agreed") return words("Credit agreed", "verdigris", `${carrierName} gives credit. Billing is cleared for this leg.`);
+  const { quote, cleared, carrierName, payerIsOwner } = leg;
+  if (quote?.state === "paid") return words("Paid", "verdigris", "By card", `${formatMoney(quote.totalCents)} is paid for quote ${quote.number}. Billing is cleared for this leg.`);
+  if (cleared?.how === "credit-agreed") return words("Credit agreed", "verdigris", "On credit", `${carrierName} gives credit. Billing is cleared for this leg.`);
   if (!quote) return beforeQuote(leg);
-  if (quote.lapsed) return words("Quote lapsed", "oxide", `It was good until ${formatDay(quote.goodUntil ?? "")}. ${carrierName} voids it and gives a new one.`);
-  if (quote.state === "given") return words("Waiting for agreement", "brass", `${payerName ?? quote.payerName}, or the owner, agrees to quote ${quote.number}, then pays.`);
-  if (quote.payments.some(isOpen)) return words("Payment page open", "brass", `Waiting until ${payerName ?? quote.payerName} has paid on the payment service’s page.`);
-  return words("Agreed, not paid", "brass", `${payerName ?? quote.payerName}, or the owner, pays ${formatMoney(quote.totalCents)} by card; or ${carrierName} agrees to credit.`);
+  const payer = leg.payerName ?? quote.payerName;
+  const orOwner = payerIsOwner ? "" : " The owner may do it too.";
+  if (quote.lapsed) return words("Quote lapsed", "oxide", carrierName, `voids quote ${quote.number}, which was good until ${formatDay(quote.goodUntil ?? "")}, and gives a new one.`);
+  if (quote.state === "given") return words("Waiting for agreement", "brass", payer, `agrees to quote ${quote.number}, then pays it.${orOwner}`);
+  if (quote.payments.some(isOpen)) return words("Payment page open", "brass", payer, "pays on the payment service’s page. Billing is cleared when the payment service has confirmed it.");
+  return words("Agreed, not paid", "brass", payer, `pays ${formatMoney(quote.totalCents)} by card, or ${carrierName} agrees to credit.${orOwner}`);
 }
 
 const declined = (times: number) => (times === 0 ? "" : times === 1 ? " A card was declined." : ` Cards were declined ${times} times.`);
@@ -51,6 +53,6 @@ export const PAYMENT_WORDS: Record<PaymentView["state"], string> = { begun: "Beg
 
 /** What stands against writing a quote for a leg now, in words; null when nothing does. */
 export function quoteBar(leg: FeeLeg): string | null {
-  if (!leg.payerSeated) return beforeQuote(leg).next;
+  if (!leg.payerSeated) return leg.payerName === null ? "Nobody is named yet who pays for this leg. The owner names and invites the payer first." : `${leg.payerName} is named as the payer but not invited yet. The owner invites them first.`;
   return leg.quote ? `Quote ${leg.quote.number} stands for this leg. Void it before giving another.` : null;
 }
