@@ -11,9 +11,10 @@ const pounds = (lb: number) => `${lb.toLocaleString("en-US")} lb`;
 /** The lines under the mark: what the unit is, how old, under which other names it goes. */
 export function describeUnit({ unit }: Pick<CaseFile, "unit">): string[] {
   const brake = BRAKE_SCHEDULES.find((one) => one === unit.brakeSchedule);
-  const first = [`${unit.axles}-axle ${BODY_SHAPE_LABELS[unit.shape].toLowerCase()}`, unit.model, brake ? `${BRAKE_SCHEDULE_LABELS[brake]} brake` : null].filter(Boolean).join(", ");
-  const lines = [first];
-  if (unit.builtYear) lines.push(`built ${unit.builtYear}`);
+  const form = `${unit.axles}-axle ${BODY_SHAPE_LABELS[unit.shape].toLowerCase()}`;
+  const lines = [brake ? `${form}, ${BRAKE_SCHEDULE_LABELS[brake]} brake` : form];
+  const origin = [unit.model, unit.builtYear ? `built ${unit.builtYear}` : null].filter(Boolean).join(", ");
+  if (origin) lines.push(origin);
   if (unit.aliases.length > 0) lines.push(`also known as ${unit.aliases.join(", ")}`);
   return lines;
 }

@@ -24,7 +24,7 @@ export function AnswerGroups({ requirements, answers, onAnswer, errorOf, open = 
         const wrong = asked.some(({ key }) => errorOf(`answers.${key}`));
         return (
           <Disclosure key={group} open={open || wrong || undefined} className="-mt-px" summary={<>{REQUIREMENT_GROUP_LABELS[group]} <span className="text-14 font-normal text-ink-2">{answered} of {asked.length} answered</span></>}>
-            <div className="grid gap-5 pt-2 sm:grid-cols-2">
+            <div className="grid gap-5 pt-2 sm:grid-cols-2 sm:items-end">
               {asked.map((requirement) => (
                 <AnswerField key={requirement.key} requirement={requirement} value={answers[requirement.key] ?? ""} onChange={(value) => onAnswer(requirement.key, value)} error={errorOf(`answers.${requirement.key}`)} />
               ))}

@@ -46,7 +46,7 @@ export function MoveTable({ rows, at, filter, busy, onSort }: MoveTableProps) {
               return (
                 <Th key={header.id} className={WIDTHS[header.column.id]} aria-sort={sorted ? (filter.descending ? "descending" : "ascending") : undefined}>
                   {key ? (
-                    <button type="button" className="lab inline-flex min-h-6 items-center gap-1.5 underline-offset-4 hover:underline pointer-coarse:min-h-11" onClick={() => onSort(key, sorted ? !filter.descending : false)}>
+                    <button type="button" className="lab inline-flex min-h-6 items-center gap-1.5 text-left underline-offset-4 hover:underline pointer-coarse:min-h-11" onClick={() => onSort(key, sorted ? !filter.descending : false)}>
                       <table.FlexRender header={header} />
                       <SortSign descending={sorted ? filter.descending : null} />
                     </button>

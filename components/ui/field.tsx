@@ -57,7 +57,7 @@ export function FieldFrame({ id, label, hint, error, required, className, childr
     <div className={clsx("min-w-0", className)}>
       <label htmlFor={id} className="lab mb-1 block">
         {label}
-        {required && <RequiredMark />}
+        {required && <RequiredMark afterSentence={typeof label === "string" && /[.?]$/.test(label)} />}
       </label>
       {hint && <FieldHint id={id}>{hint}</FieldHint>}
       {children}

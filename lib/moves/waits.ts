@@ -62,7 +62,8 @@ export function waitSentence(waiting: Waited & { part: Part; name: string; you: 
   const { waitingFor, you, part, name } = waiting;
   const count = waiting.count ?? 0;
   if (you) return WAIT_WORDS[waitingFor].you(count);
-  const who = name === "Contractor" || name === "Receiver" ? `the ${name.toLowerCase()}` : waitName({ part, name });
+  const work = PART_OF_NAME[part];
+  const who = name === "Contractor" || name === "Receiver" ? `the ${name.toLowerCase()}` : work ? `${name}’s ${work}` : name;
   return `The move waits on ${who} to ${WAIT_WORDS[waitingFor].to(count)}.`;
 }
 

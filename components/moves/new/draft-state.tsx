@@ -28,7 +28,7 @@ function words(status: SaveStatus): string {
 export function DraftState({ status, onKeepAnew }: { status: SaveStatus; onKeepAnew: () => void }) {
   const bad = status.kind === "failed" || status.kind === "conflict" || status.kind === "gone";
   return (
-    <div className="flex flex-wrap items-center gap-3">
+    <div className="sticky top-0 z-10 -my-2 flex flex-wrap items-center gap-3 border-b border-rule bg-card py-2">
       <p role="status" suppressHydrationWarning className={bad ? "text-14 font-[620] text-oxide" : "text-14 text-ink-2"}>
         {words(status)}
       </p>

@@ -87,6 +87,7 @@ export function MoveForm({ companies, draft }: MoveFormProps) {
   const faults = Object.entries(fields).flatMap(([name, messages]) => messages.map((message) => ({ name, message })));
   return (
     <form noValidate onSubmit={submit} className="grid gap-6">
+      <DraftState status={status} onKeepAnew={() => saver.keepAnew()} />
       {open.error && <FormErrors title={open.error.message} errors={faults.length > 0 ? faults : [{ message: "Everything that was typed is still here." }]} />}
       {status.kind === "conflict" && (
         <DraftConflict
@@ -107,7 +108,6 @@ export function MoveForm({ companies, draft }: MoveFormProps) {
       <RouteSection {...section} ownerName={ownerName} />
       <WhenSection {...section} />
       <ReviewSection form={form} ownerName={ownerName} />
-      <DraftState status={status} onKeepAnew={() => saver.keepAnew()} />
       <ActionBar>
         <Button type="submit" busy={open.isPending || open.isSuccess} busyWords="Opening…">
           Open the move

@@ -29,7 +29,7 @@ export function UnitSection({ form, change, errorOf }: SectionProps) {
   const shape = BODY_SHAPES.find((one) => one === answers.shape);
   return (
     <Sheet title="1. The unit" lead="As it stands there, not as a roster has it.">
-      <div className="grid gap-5 sm:grid-cols-2">
+      <div className="grid gap-5 sm:grid-cols-2 sm:items-end">
         <div className="grid grid-cols-2 gap-5">
           <TextField name="answers.mark" label="Reporting mark" hint="Exactly as stencilled." mono required maxLength={12} autoComplete="off" autoCapitalize="characters" value={answers.mark ?? ""} onChange={(event) => answer("mark", event.target.value)} error={errorOf("answers.mark")} />
           <TextField name="answers.number" label="Number" hint="Exactly as stencilled." mono required maxLength={12} autoComplete="off" value={answers.number ?? ""} onChange={(event) => answer("number", event.target.value)} error={errorOf("answers.number")} />
@@ -44,7 +44,7 @@ export function UnitSection({ form, change, errorOf }: SectionProps) {
       )}
       <h3 className="mt-8 mb-1 text-17 font-[680]">What every carrier asks first</h3>
       <p className="mb-4 max-w-[66ch] text-14 text-ink-2">Answer as far as you know. Nothing here stops a move; it tells you what usually follows, so that you can ask early.</p>
-      <div className="grid gap-5 sm:grid-cols-3">{FIRST.map(field)}</div>
+      <div className="grid gap-5 sm:grid-cols-3 sm:items-end">{FIRST.map(field)}</div>
       <div className="mt-4 grid gap-3">
         {consequencesOf(answers).filter(({ key, weight }) => weight === "caution" || (answers[key] ?? "") !== "").map(({ key, weight, text }) => (
           <Notice key={key} kind={weight === "caution" ? "caution" : "info"}>
