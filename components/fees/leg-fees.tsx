@@ -42,7 +42,7 @@ function NoQuote({ moveId, leg }: { moveId: string; leg: FeeLeg }) {
   return (
     <p className="max-w-[66ch] text-14">
       No quote yet. {leg.payerSeated ? "What the carrier asks for this leg stands here once its billing clerk has given it." : quoteBar(leg)}{" "}
-      {!leg.payerSeated && <TextLink href={routes.people(moveId)}>People on this move</TextLink>}
+      {!leg.payerSeated && (leg.payerName === null ? <TextLink href={routes.unit(moveId)}>Unit and route</TextLink> : <TextLink href={routes.people(moveId)}>People on this move</TextLink>)}
     </p>
   );
 }
