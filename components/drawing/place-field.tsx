@@ -11,7 +11,7 @@ function grouped(places: readonly Place[]): ChoiceGroup[] {
   return groups.map((group) => ({ group, choices: places.filter((place) => place.group === group).map(({ id, name }) => ({ value: id, label: name })) }));
 }
 
-export type PlaceFieldProps = Omit<ComponentProps<typeof SelectField>, "choices" | "value" | "onChange" | "defaultValue"> & {
+export type PlaceFieldProps = Omit<ComponentProps<typeof SelectField>, "choices" | "value" | "onChange" | "defaultValue" | "form"> & {
   form: UnitForm;
   /** The id of the place, or "" while none is chosen. */
   value: string;

@@ -33,7 +33,7 @@ export function AnswerForm({ finding, userId, onDone }: AnswerFormProps) {
     <form noValidate onSubmit={submit} aria-label="Answer" className="grid gap-4">
       <FormErrors errors={faults.list} title="Not sent." />
       {restored && <p role="status" className="text-14 text-ink-2">What you had typed before is still here.</p>}
-      <TextArea name="text" label="What was done, or found when looking" required rows={4} value={value.text} onChange={(event) => change({ ...value, text: event.target.value })} error={faults.field("text")} autoFocus />
+      <TextArea name="text" label="What was done, or found when looking" required rows={4} value={value.text} onChange={(event) => change({ ...value, text: event.target.value })} error={faults.field("text")} />
       <TextField name="reading" label="Reading now, with its unit" hint="If it was measured again, for instance 5 1/8 in." mono autoComplete="off" value={value.reading} onChange={(event) => change({ ...value, reading: event.target.value })} error={faults.field("reading")} />
       <PhotoField moveId={finding.moveId} label="Photos" value={value.photos} onChange={(photos) => change({ ...value, photos })} error={faults.field("photoIds")} />
       <ActionBar>

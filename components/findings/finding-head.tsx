@@ -6,7 +6,7 @@ import { State } from "@/components/ui/state";
 import { Mono } from "@/components/ui/text";
 import type { FindingDetail } from "@/lib/findings/types";
 import { SEVERITY_LABELS } from "@/lib/findings/vocabulary";
-import { stateWords } from "@/lib/findings/words";
+import { stateWords, titleWords } from "@/lib/findings/words";
 import { airCaution } from "@/lib/inspections/rules";
 import { formatShortDay, formatWhen } from "@/lib/moves/when";
 import { toneOfFinding } from "./finding-tone";
@@ -22,7 +22,7 @@ export function FindingHead({ finding }: { finding: FindingDetail }) {
         <Mono className="mr-2 max-sm:hidden">{finding.label}</Mono>
         Finding by {finding.carrierName}, {formatShortDay(finding.visitedOn)}
       </p>
-      <h2 className="mt-1 mb-2 text-21 leading-tight font-[700] tracking-[-0.01em] sm:text-28">{finding.where ? `${finding.component}, ${lowered(finding.where)}` : finding.component}</h2>
+      <h2 className="mt-1 mb-2 text-21 leading-tight font-[700] tracking-[-0.01em] sm:text-28">{titleWords(finding.component, finding.where)}</h2>
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
         <State tone={toneOfFinding(finding)} className="text-14">{stateWords(finding, finding.now)}</State>
         <span className="text-14 font-[620]">{SEVERITY_LABELS[finding.severity]}</span>
@@ -32,14 +32,11 @@ export function FindingHead({ finding }: { finding: FindingDetail }) {
   );
 }
 
-// Places are named like headings; inside a line only the first letter differs.
-const lowered = (where: string) => where.charAt(0).toLowerCase() + where.slice(1);
-
 /** What was measured or seen, under which condition, and what it shows. */
 export function FoundPart({ finding }: { finding: FindingDetail }) {
   const caution = airCaution(finding.air, finding.group === "brakes");
   return (
-    <section aria-label="Found" className={`${SECTION} grid gap-3`}>
+    <section aria-label="Found" className={`${SECTION} grid gap-3 lg:border-b-0`}>
       <div className="flex items-baseline justify-between gap-4">
         <span className="lab">Found</span>
         {finding.reading && <Mono className="text-21 font-semibold">{finding.reading}</Mono>}

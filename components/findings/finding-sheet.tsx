@@ -16,6 +16,9 @@ import { FindingHead, FoundPart } from "./finding-head";
 import { ReplyForm } from "./reply-form";
 import { Thread } from "./thread";
 
+// Kept outside of the component, so that it runs when the form comes and not with every letter typed.
+const focusOnMount = (element: HTMLElement | null) => element?.focus();
+
 export type FindingSheetProps = { first: FindingDetail; userId: string };
 
 /** One finding, made for a phone beside the unit: what was found, what was said, and the one thing to do now. */
@@ -32,17 +35,21 @@ export function FindingSheet({ first, userId }: FindingSheetProps) {
         <p className="border-b border-rule px-6 py-2.5 text-14 max-sm:hidden">
           <TextLink href={routes.findings(finding.moveId)}>All findings</TextLink>
         </p>
-        <FindingHead finding={finding} />
-        <FoundPart finding={finding} />
-        <div className="bg-card px-4 py-4 sm:bg-sheet sm:px-6 sm:pb-6">
-          {finding.entries.length > 0 ? <Thread entries={finding.entries} zone={finding.zone} /> : <p className="text-14 text-ink-2">{finding.severity === "note" ? "Nobody has answered. A note needs no answer." : "Nobody has answered yet. The contractor answers here with what was done and what shows it."}</p>}
-          <p role="status" className="mt-3 text-14 text-ink-2 empty:hidden">{isError && `No connection. This is the finding as of ${formatWhen(finding.now, finding.zone)}.`}</p>
-          {doing === null && <Acts finding={finding} onChoose={setDoing} />}
-          {doing !== null && (
-            <div className="mt-5 border-t-2 border-ink pt-4">
-              {doing === "answer" ? <AnswerForm finding={finding} userId={userId} onDone={onDone} /> : <ReplyForm key={doing} finding={finding} act={doing} onDone={onDone} />}
-            </div>
-          )}
+        <div className="lg:grid lg:grid-cols-[minmax(0,460px)_minmax(0,1fr)]">
+          <div className="lg:border-r lg:border-rule-strong">
+            <FindingHead finding={finding} />
+            <FoundPart finding={finding} />
+          </div>
+          <div className="bg-card px-4 py-4 sm:bg-sheet sm:px-6 sm:pb-6">
+            {finding.entries.length > 0 ? <Thread entries={finding.entries} zone={finding.zone} /> : <p className="text-14 text-ink-2">{finding.severity === "note" ? "Nobody has answered. A note needs no answer." : "Nobody has answered yet. The contractor answers here with what was done and what shows it."}</p>}
+            <p role="status" className="mt-3 text-14 text-ink-2 empty:hidden">{isError && `No connection. This is the finding as of ${formatWhen(finding.now, finding.zone)}.`}</p>
+            {doing === null && <Acts finding={finding} onChoose={setDoing} />}
+            {doing !== null && (
+              <div key={doing} ref={focusOnMount} tabIndex={-1} className="mt-5 scroll-mt-4 border-t-2 border-ink pt-4 outline-none">
+                {doing === "answer" ? <AnswerForm finding={finding} userId={userId} onDone={onDone} /> : <ReplyForm finding={finding} act={doing} onDone={onDone} />}
+              </div>
+            )}
+          </div>
         </div>
       </div>
     </article>

@@ -39,7 +39,7 @@ function Row({ moveId, finding, now }: { moveId: string; finding: FindingView; n
   const { severity, state } = finding;
   return (
     <tr>
-      <Td label="No." mono>{finding.label}</Td>
+      <Td mono className="max-sm:text-ink-2">{finding.label}</Td>
       <RowHead>
         <TextLink href={routes.finding(moveId, finding.id)} className="inline-flex items-center py-0.5 font-[680] max-sm:min-h-11 max-sm:text-17">{finding.component}</TextLink>
         {finding.where && <span className="block text-ink-2">{finding.where}</span>}

@@ -3,7 +3,7 @@
 import { useMutation } from "@tanstack/react-query";
 import { useRouter } from "next/navigation";
 import { useState, type FormEvent } from "react";
-import { EMPTY_ENTERED_FOR } from "@/components/access/entered-for";
+import { EMPTY_ENTERED_FOR, type EnteredForValue } from "@/components/access/entered-for";
 import { EnteredForFields } from "@/components/access/entered-for-fields";
 import { PlaceField } from "@/components/drawing/place-field";
 import { PhotoField } from "@/components/evidence/photo-field";
@@ -47,7 +47,8 @@ export function PostForm({ moveId, leg, visitId, unit, entering }: PostFormProps
   const router = useRouter();
   const [given, setGiven] = useState({ inspectionId: visitId, componentId: "", placeId: "", placeNote: "", observed: "", reading: "", condition: "", severity: "", noPhotoReason: "" });
   const [photos, setPhotos] = useState<PhotoView[]>([]);
-  const [enteredFor, setEnteredFor] = useState(EMPTY_ENTERED_FOR);
+  // Findings mostly come in with the news of the visit itself.
+  const [enteredFor, setEnteredFor] = useState<EnteredForValue>(() => heardLike(leg.visits.find((one) => one.id === visitId)));
   const intent = useIntent();
   const post = useMutation(postFindingMutation(moveId));
   const faults = faultsOf(post.error);
@@ -85,6 +86,9 @@ export function PostForm({ moveId, leg, visitId, unit, entering }: PostFormProps
     </form>
   );
 }
+
+const heardLike = (visit: VisitView | undefined): EnteredForValue =>
+  visit?.enteredFor ? { source: visit.enteredFor.source, heardOn: visit.enteredFor.heardOn, saidBy: visit.enteredFor.saidBy, reference: visit.enteredFor.reference ?? "" } : EMPTY_ENTERED_FOR;
 
 const visitLabel = ({ number, visitedOn, inspectorName }: VisitView) => `Visit ${number}, ${formatDay(visitedOn)}, ${inspectorName}`;
 

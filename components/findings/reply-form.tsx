@@ -49,7 +49,7 @@ export function ReplyForm({ finding, act, onDone }: { finding: FindingDetail; ac
       <FormErrors errors={faults.list} title={words.refused} />
       {act === "clear" && <p className="text-14 text-ink-2">Nothing more is said about a finding that is cleared. The rounds stay to be read.</p>}
       {entering && <EnteredForFields value={enteredFor} onChange={setEnteredFor} errors={faults.field} carrierName={finding.carrierName} />}
-      <TextArea name="text" label={words.text} required={words.required} rows={3} value={text} onChange={(event) => setText(event.target.value)} error={faults.field("text")} autoFocus={!entering} />
+      <TextArea name="text" label={words.text} required={words.required} rows={3} value={text} onChange={(event) => setText(event.target.value)} error={faults.field("text")} />
       {act === "not-cleared" && (
         <>
           <TextArea name="wouldSatisfy" label="What would satisfy" hint="Part, measurement, condition or photo, so that one more answer is enough." required rows={3} value={wouldSatisfy} onChange={(event) => setWouldSatisfy(event.target.value)} error={faults.field("wouldSatisfy")} />

@@ -11,7 +11,7 @@ import { placeName } from "@/lib/moves/places";
 import type { CaseNews } from "@/lib/outbox/types";
 import type { RecordKind } from "@/lib/record/vocabulary";
 import { routes } from "@/lib/routes";
-import { allowOnLeg, requireLeg, writeOnMove, type MoveWrite } from "@/lib/standing/commands";
+import { allowOnLeg, writeOnMove, type MoveWrite } from "@/lib/standing/commands";
 import { unsafeGatherFacts } from "@/lib/standing/queries";
 import type { Attempt, Viewer } from "@/lib/viewer/types";
 import { findStandingAcceptance, liftAcceptance } from "./commands/lift-acceptance";
@@ -21,10 +21,10 @@ import { axlesOf } from "./places";
 import { unsafeLastEntry } from "./queries";
 import { ACTION_OF, afterAct, denyPosting, denyState, ENTRY_OF, type FindingAct } from "./rules";
 import { SEVERITY_LABELS } from "./vocabulary";
-import { changeWords, findingLabel, whereWords } from "./words";
+import { changeWords, findingLabel, titleWords, whereWords } from "./words";
 
 type Finding = typeof findings.$inferSelect;
-type Leg = Awaited<ReturnType<typeof requireLeg>>;
+type Leg = typeof legs.$inferSelect;
 
 /** What every sentence about a finding is made of. */
 type Told = { label: string; component: string; where: string | null; unit: string; carrierName: string };
@@ -39,8 +39,7 @@ async function toldOf(ctx: MoveWrite, finding: Pick<Finding, "number" | "compone
 const detailOf = ({ label, component, where, carrierName }: Told, more: Record<string, unknown>) => ({ number: label, component, place: where, carrierName, ...more });
 
 function newsOf(ctx: MoveWrite, told: Told, findingId: string, headline: string, lines: (string | null)[], actionLabel: string): CaseNews {
-  const what = told.where ? `${told.component}, ${told.where}` : told.component;
-  return { unit: told.unit, caseNumber: ctx.move.caseNumber, headline, lines: [`${told.label}: ${what}.`, ...lines.filter((line) => line !== null)], actionLabel, url: `${env().APP_URL}${routes.finding(ctx.move.id, findingId)}` };
+  return { unit: told.unit, caseNumber: ctx.move.caseNumber, headline, lines: [`${told.label}: ${titleWords(told.component, told.where)}.`, ...lines.filter((line) => line !== null)], actionLabel, url: `${env().APP_URL}${routes.finding(ctx.move.id, findingId)}` };
 }
 
 /** Posts a finding under a visit. One that stops the move ends an acceptance that was signed before, unless the carrier has the unit already. */

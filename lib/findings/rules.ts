@@ -49,13 +49,21 @@ export function afterAct(finding: { state: FindingState; rounds: number }, act: 
 
 type Posting = { componentId: string; placeId: string | null; placeNote: string | null; photoIds: readonly string[]; noPhotoReason: string | null };
 
+export const NO_PLACE_WORDS = "Say where on the unit it is: on the drawing, from the list or in words.";
+export const NO_PHOTO_WORDS = "Add a photo, or say below why there is none.";
+
+/** Whether the part sits somewhere on the unit and nobody has said where. */
+export const lacksPlace = ({ componentId, placeId, placeNote }: Partial<Posting>) => (findComponent(componentId ?? "")?.places.length ?? 0) > 0 && !placeId && !placeNote;
+
+/** Whether there is neither a photo nor the reason why there is none. */
+export const lacksPhoto = ({ photoIds, noPhotoReason }: Partial<Posting>) => (photoIds?.length ?? 0) === 0 && !noPhotoReason;
+
 /** A finding says what and where on this unit, and shows it or says why it can't. */
 export function denyPosting(given: Posting, axles: Axles | null): Denial | null {
   const fields: FieldErrors = {};
-  const component = findComponent(given.componentId);
-  if (!component) fields.componentId = ["Choose what the finding is about."];
+  if (!findComponent(given.componentId)) fields.componentId = ["Choose what the finding is about."];
   if (given.placeId && !(axles && placeName(given.placeId, axles))) fields.placeId = ["This unit has no such place."];
-  if (component && component.places.length > 0 && !given.placeId && !given.placeNote) fields.placeId = ["Say where on the unit it is: on the drawing, from the list or in words."];
-  if (given.photoIds.length === 0 && !given.noPhotoReason) fields.photoIds = ["Add a photo, or say below why there is none."];
+  if (lacksPlace(given)) fields.placeId = [NO_PLACE_WORDS];
+  if (lacksPhoto(given)) fields.photoIds = [NO_PHOTO_WORDS];
   return Object.keys(fields).length > 0 ? { code: "bad_input", message: "Some entries need another look.", fields } : null;
 }

@@ -7,6 +7,12 @@ export const findingLabel = (number: number) => `F-${String(number).padStart(2, 
 /** Place and what was added to it in one line. */
 export const whereWords = (place: string | null, note: string | null): string | null => [place, note].filter((part) => part !== null).join(", ") || null;
 
+/** What and where in one line, as a heading: `Flat spot, wheel R4, right side`. A place that says the part already stands alone. */
+export function titleWords(component: string, where: string | null): string {
+  if (!where) return component;
+  return where.toLowerCase().startsWith(component.toLowerCase()) ? where : `${component}, ${where.charAt(0).toLowerCase()}${where.slice(1)}`;
+}
+
 type Stated = { state: FindingState; sentBack: boolean; stateSince: string; severity: Severity; zone: string };
 
 const waited = (stated: Stated, now: string) => {

@@ -107,7 +107,7 @@ it("of another move is not found, neither its visit nor itself", async () => {
 it("needs a photo or a reason, a component and a place of this unit, all said at once", async () => {
   const { moveId, legIds, inspectorA } = await seedMove();
   const inspectionId = await seedVisit(inspectorA, moveId, legIds[0]);
-  await expect(postFinding(inspectorA, aFinding(moveId, inspectionId, { noPhotoReason: "", placeId: "wheel-L9", componentId: "keel" }), anAttempt())).rejects.toMatchObject({
+  await expect(postFinding(inspectorA, { ...aFinding(moveId, inspectionId), noPhotoReason: null, placeId: "wheel-L9", componentId: "keel" }, anAttempt())).rejects.toMatchObject({
     code: "bad_input", fields: { photoIds: [expect.any(String)], placeId: [expect.any(String)], componentId: [expect.any(String)] },
   });
   expect((await listFindings(inspectorA, moveId)).findings).toEqual([]);

@@ -27,7 +27,7 @@ it("a visit is on record with its air, numbered on its leg, and seen by the next
 it("a day that has not come yet at the place is refused with its field", async () => {
   const { moveId, legIds, inspectorA } = await seedMove();
   const tomorrow = new Date(Date.now() + 48 * 3600_000).toISOString().slice(0, 10);
-  await expect(recordVisit(inspectorA, aVisit(moveId, legIds[0], { visitedOn: tomorrow, airSource: "" }), anAttempt())).rejects.toMatchObject({ code: "bad_input", fields: { visitedOn: [expect.any(String)], airSource: [expect.any(String)] } });
+  await expect(recordVisit(inspectorA, { ...aVisit(moveId, legIds[0]), visitedOn: tomorrow, airSource: null }, anAttempt())).rejects.toMatchObject({ code: "bad_input", fields: { visitedOn: [expect.any(String)], airSource: [expect.any(String)] } });
   expect(recordVisitInput.safeParse({ ...aVisit(moveId, legIds[0]), airPsi: "a lot" }).error?.issues[0]?.path).toEqual(["airPsi"]);
 });
 

@@ -1,5 +1,5 @@
 import { expect, it } from "vitest";
-import { changeWords, countWords, findingLabel, shortStateWords, stateWords, whereWords } from "@/lib/findings/words";
+import { changeWords, countWords, findingLabel, shortStateWords, stateWords, titleWords, whereWords } from "@/lib/findings/words";
 import type { FindingState } from "@/lib/findings/vocabulary";
 
 const NOW = "2026-11-18T15:00:00.000Z";
@@ -26,5 +26,6 @@ it("tells whoever comes second what changed, by the clock of the place", () => {
 it("numbers, places and counts", () => {
   expect([findingLabel(1), findingLabel(12), findingLabel(100)]).toEqual(["F-01", "F-12", "F-100"]);
   expect([whereWords("Wheel R4, right side", "two spots"), whereWords(null, "under the cab"), whereWords("Roof and exhaust", null), whereWords(null, null)]).toEqual(["Wheel R4, right side, two spots", "under the cab", "Roof and exhaust", null]);
+  expect([titleWords("Flat spot", "Wheel R4, right side"), titleWords("Hand brake", "Hand brake, chain"), titleWords("Register entry", null)]).toEqual(["Flat spot, wheel R4, right side", "Hand brake, chain", "Register entry"]);
   expect(countWords([{ state: "cleared" }, { state: "open" }, { state: "open" }])).toBe("2 open, 1 cleared");
 });

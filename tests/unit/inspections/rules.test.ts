@@ -16,7 +16,7 @@ it.each([
 });
 
 it("a brake finding without air is provisional, others are not", () => {
-  expect(airCaution("off", true)).toMatch(/^Taken without air/);
+  expect(airCaution("off", true)).toMatch(/no air on the unit/);
   expect(airCaution("not-said", true)).toMatch(/not said/);
   expect([airCaution("on", true), airCaution("off", false), airNote("off", false)]).toEqual([null, null, null]);
   expect(airNote("off", true)).toBe("taken without air");

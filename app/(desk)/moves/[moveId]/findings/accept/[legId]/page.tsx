@@ -1,9 +1,10 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
 import { AcceptanceForm } from "@/components/acceptance/acceptance-form";
-import { Sheet } from "@/components/ui/sheet";
+import { FieldScreen } from "@/components/findings/field-screen";
 import { listAcceptances } from "@/lib/acceptance/queries";
 import { load } from "@/lib/entry/load";
+import { routes } from "@/lib/routes";
 
 export const metadata: Metadata = { title: "Acceptance" };
 
@@ -14,8 +15,8 @@ export default async function AcceptPage({ params }: { params: Promise<{ moveId:
   const leg = acceptances.legs.find((one) => one.legId === legId);
   if (!leg) notFound();
   return (
-    <Sheet title={`Acceptance by ${leg.carrierName}`} lead={`${acceptances.unit} on leg ${leg.seq}, from ${leg.fromPlace} to ${leg.toPlace}.`}>
+    <FieldScreen backHref={routes.findings(moveId)} unit={acceptances.unit} note={`Leg ${leg.seq}`} title={`Acceptance by ${leg.carrierName}`} lead={`${acceptances.unit} on leg ${leg.seq}, from ${leg.fromPlace} to ${leg.toPlace}.`}>
       <AcceptanceForm moveId={moveId} legId={legId} first={acceptances} />
-    </Sheet>
+    </FieldScreen>
   );
 }
