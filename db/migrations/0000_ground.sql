@@ -714,7 +714,9 @@ CREATE INDEX `findings_leg` ON `findings` (`leg_id`,`state`);--> statement-break
 CREATE INDEX `inspections_move` ON `inspections` (`move_id`);--> statement-breakpoint
 CREATE INDEX `fee_lines_quote` ON `fee_lines` (`quote_id`);--> statement-breakpoint
 CREATE INDEX `ledger_postings_leg` ON `ledger_postings` (`leg_id`);--> statement-breakpoint
+CREATE INDEX `payment_events_payment` ON `payment_events` (`payment_id`);--> statement-breakpoint
 CREATE INDEX `payments_state` ON `payments` (`state`,`begun_at`);--> statement-breakpoint
+CREATE INDEX `payments_intent` ON `payments` (`intent_id`);--> statement-breakpoint
 CREATE INDEX `quotes_move` ON `quotes` (`move_id`);--> statement-breakpoint
 CREATE INDEX `instructions_leg` ON `instructions` (`leg_id`,`withdrawn_at`);--> statement-breakpoint
 CREATE INDEX `sightings_move` ON `sightings` (`move_id`,`occurred_at`);--> statement-breakpoint
