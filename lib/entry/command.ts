@@ -19,7 +19,8 @@ export function requireOurOrigin(headers: Headers): void {
 
 /** Every field's fault under its path, `legs.1.payer`; faults of the whole form under `form`. */
 export function fieldErrors(error: z.ZodError): FieldErrors {
-  const fields: FieldErrors = {};
+  // Without a prototype: a body may well have a key named "constructor".
+  const fields = Object.create(null) as FieldErrors;
   for (const issue of error.issues) {
     const unknown = issue.code === "unrecognized_keys" ? issue.keys.map((key) => [...issue.path, key]) : [issue.path];
     for (const path of unknown) (fields[path.map(String).join(".") || "form"] ??= []).push(issue.code === "unrecognized_keys" ? "Not a field of this form." : issue.message);

@@ -2,8 +2,9 @@ import "server-only";
 import { headers } from "next/headers";
 import { unstable_rethrow } from "next/navigation";
 import type { z } from "zod";
-import { AppError, type FieldErrors } from "@/lib/errors";
+import type { FieldErrors } from "@/lib/errors";
 import { parse, requireOurOrigin } from "./command";
+import { tell } from "./problem";
 
 /** What a plain form shows after it was sent: what is wrong, and what was typed (never a password). */
 export type FormState = { message: string | null; fields: FieldErrors; values: Record<string, string> };
@@ -21,8 +22,7 @@ export async function handleForm<S extends z.ZodType>(schema: S, data: FormData,
     return (await run(parse(schema, given))) ?? EMPTY_FORM;
   } catch (error) {
     unstable_rethrow(error);
-    if (error instanceof AppError) return { message: error.message, fields: error.fields ?? {}, values };
-    console.error("unexpected", error);
-    return { message: "That did not go through. Nothing was saved.", fields: {}, values };
+    const { title: message, fields = {} } = tell(error);
+    return { message, fields, values };
   }
 }

@@ -12,7 +12,8 @@ export function route<P extends Record<string, string>>(run: (viewer: Viewer, pa
   return async (request: Request, context: { params: Promise<P> }): Promise<Response> => {
     try {
       const viewer = await requireViewer();
-      const params = await context.params;
+      // A door without path parameters is given none at all.
+      const params = (await context.params) ?? ({} as P);
       if (Object.values(params).some((value) => !ID.test(value))) throw new AppError("not_found", "No such thing.");
       const body = await run(viewer, params, request);
       return body instanceof Response ? body : Response.json(body, { headers: { "cache-control": "private, no-store" } });

@@ -1,10 +1,10 @@
 import "server-only";
-import { AppError, REFUSALS } from "@/lib/errors";
 import { unsafeCountTry } from "@/lib/viewer/commands";
 import type { Viewer } from "@/lib/viewer/types";
 import { requireViewer } from "@/lib/viewer/viewer";
 import { readBytes } from "./body";
 import { requireOurOrigin } from "./command";
+import { tell } from "./problem";
 
 /** The door that the upload library talks to: our own page asking where to send a file, or the file service reporting one under a signature that the library checks. */
 export function sending(door: (request: Request, viewer: Viewer | null) => Promise<Response>) {
@@ -14,9 +14,8 @@ export function sending(door: (request: Request, viewer: Viewer | null) => Promi
       const body = Buffer.from(await readBytes(request));
       return await door(new Request(request.url, { method: "POST", headers: request.headers, body }), viewer);
     } catch (error) {
-      if (!(error instanceof AppError)) console.error("unexpected", error);
       // The library's page side shows `message`.
-      const [message, status] = error instanceof AppError ? [error.message, REFUSALS[error.code]] : ["That did not go through. Nothing was saved.", 500];
+      const { title: message, status } = tell(error);
       return Response.json({ message }, { status, headers: { "cache-control": "no-store" } });
     }
   };

@@ -5,7 +5,7 @@ import { pause } from "../http";
 import type { Mailbox } from "./mailbox";
 
 /** What the sink can do wrong on order. */
-export const MAIL_FAULTS = ["refuse", "reject", "slow", "drop-after-data"] as const;
+export const MAIL_FAULTS = ["refuse", "reject", "slow", "drop-after-data", "late-answer"] as const;
 
 const LARGEST_MESSAGE_BYTES = 25 * 1024 * 1024;
 const SLOW_MS = 60_000;
@@ -28,7 +28,10 @@ export async function listenSmtp(port: number, mailbox: Mailbox, faults: Faults)
     onRcptTo: (address, _session, done) => void judgeRecipient(faults, address.address).then(done, done),
     onData: (stream, session, done) => {
       take(stream, session, mailbox).then(
-        () => (takesAnswer(faults, session) ? done() : dropConnection(server, session)),
+        async () => {
+          await late(faults, session);
+          return takesAnswer(faults, session) ? done() : dropConnection(server, session);
+        },
         (error: unknown) => done(error instanceof Error ? error : new Error(String(error))),
       );
     },
@@ -69,11 +72,17 @@ async function take(stream: SMTPServerDataStream, session: SMTPServerSession, ma
   await mailbox.keep(Buffer.concat(chunks), { from: mailFrom ? mailFrom.address : "", to: rcptTo.map((one) => one.address) });
 }
 
-/** False when the sender must not hear that its message was taken. */
-function takesAnswer(faults: Faults, session: SMTPServerSession): boolean {
-  const recipients = session.envelope.rcptTo.map((one) => one.address.toLowerCase());
-  return !faults.take("drop-after-data", (fault) => fault.to === undefined || recipients.includes(fault.to));
+const isAmongRecipients = (session: SMTPServerSession) => (fault: { to: string | undefined }) =>
+  fault.to === undefined || session.envelope.rcptTo.some((one) => one.address.toLowerCase() === fault.to);
+
+/** The message lies here, but the sender waits to hear so. */
+async function late(faults: Faults, session: SMTPServerSession): Promise<void> {
+  const fault = faults.take("late-answer", isAmongRecipients(session));
+  if (fault) await pause(fault.ms ?? SLOW_MS);
 }
+
+/** False when the sender must not hear that its message was taken. */
+const takesAnswer = (faults: Faults, session: SMTPServerSession): boolean => !faults.take("drop-after-data", isAmongRecipients(session));
 
 function dropConnection(server: SMTPServer, session: SMTPServerSession): void {
   for (const connection of server.connections) if (connection.session.id === session.id) connection._socket.destroy();
