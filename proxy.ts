@@ -45,7 +45,8 @@ export function proxy(request: NextRequest) {
   response.headers.set("content-security-policy", isApi ? "default-src 'none'; frame-ancestors 'none'; sandbox" : policy);
   response.headers.set("x-content-type-options", "nosniff");
   response.headers.set("x-frame-options", "DENY");
-  response.headers.set("referrer-policy", PRIVATE_LINK.test(pathname) ? "no-referrer" : "same-origin");
+  // The path of a private link is its secret. Not `no-referrer`: with it a browser sends the page's own form with the origin "null".
+  response.headers.set("referrer-policy", PRIVATE_LINK.test(pathname) ? "strict-origin" : "same-origin");
   response.headers.set("cross-origin-opener-policy", "same-origin");
   response.headers.set("cross-origin-resource-policy", "same-origin");
   response.headers.set("permissions-policy", "camera=(self), geolocation=(), microphone=(), payment=(), usb=()");
