@@ -1,6 +1,7 @@
 import "server-only";
 import { and, eq, isNull } from "drizzle-orm";
 import { arrivals, equipment, instructions, legs, moves, releases, sightings } from "@/db/schema";
+import type { EnteredFor } from "@/lib/access/types";
 import { AppError, refuse } from "@/lib/errors";
 import { env } from "@/lib/env";
 import { linkPhotos } from "@/lib/evidence/commands";
@@ -9,14 +10,14 @@ import { dayAt, formatWhen, toUtc } from "@/lib/moves/when";
 import { openRestore } from "@/lib/prep/commands";
 import { keepSignature } from "@/lib/record/commands";
 import { routes } from "@/lib/routes";
-import { allowOnLeg, writeOnMove, type MoveWrite } from "@/lib/standing/commands";
+import { allowOnLeg, peopleIn, writeOnMove, type MoveWrite } from "@/lib/standing/commands";
 import { unsafeGatherFacts } from "@/lib/standing/queries";
 import { denyClosing, denyInstruction, denyRelease } from "@/lib/standing/rules";
 import type { LegFacts, MoveFacts } from "@/lib/standing/types";
 import { EVENT_CODES } from "./event-codes";
 import type { Attempt, Viewer } from "@/lib/viewer/types";
 import type { CloseMove, GiveInstruction, MakeSighting, RecordArrival, ReleaseUnit, RetractSighting, WithdrawInstruction } from "./input";
-import { arrivalStatement, closingStatement, denyArrivalDay, denyAsReceiver, denyRetraction, denySighting, denyTime, releaseStatement } from "./rules";
+import { arrivalStatement, closingStatement, denyArrivalDay, denyAsReceiver, denyRetraction, denySighting, denyTakingBack, denyTime, releaseStatement } from "./rules";
 
 async function unitOf(ctx: MoveWrite): Promise<string> {
   const [unit] = await ctx.tx.select({ mark: equipment.mark, number: equipment.number }).from(equipment).where(eq(equipment.moveId, ctx.move.id));
@@ -95,7 +96,7 @@ export async function makeSighting(viewer: Viewer, input: MakeSighting, attempt:
     const { leg, enteredFor } = await allowOnLeg(ctx, "movement.sight", input.legId, input.enteredFor);
     const occurredAt = momentOf(input);
     refuse(denyTime(occurredAt, ctx.at));
-    const replaced = input.corrects ? await retract(ctx, { sightingId: input.corrects, legId: leg.id, why: "Corrected by a newer sighting", replacedBy: input.kind }) : null;
+    const replaced = input.corrects ? await retract(ctx, { sightingId: input.corrects, legId: leg.id, why: "Corrected by a newer sighting", replacedBy: input.kind, enteredFor }) : null;
     const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
     const now = legOf(facts, leg.id);
     if (!enteredFor) refuse(denyAsReceiver(ctx.parts, facts, now, input.kind));
@@ -131,13 +132,14 @@ async function tellSighting(ctx: MoveWrite, told: Told, facts: MoveFacts, entry:
   if (["at-destination", "notified", "placed"].includes(told.kind)) await ctx.tell({ part: "receiver" }, "movement", news, entry);
 }
 
-type Retraction = { sightingId: string; legId: string; why: string; replacedBy?: MakeSighting["kind"] };
+type Retraction = { sightingId: string; legId: string; why: string; replacedBy?: MakeSighting["kind"]; enteredFor?: EnteredFor | null };
 
-async function retract(ctx: MoveWrite, { sightingId, legId, why, replacedBy }: Retraction) {
-  const all = await ctx.tx.select({ id: sightings.id, legId: sightings.legId, kind: sightings.kind, place: sightings.place, retractedAt: sightings.retractedAt, legSeq: legs.seq }).from(sightings)
+async function retract(ctx: MoveWrite, { sightingId, legId, why, replacedBy, enteredFor }: Retraction) {
+  const all = await ctx.tx.select({ id: sightings.id, legId: sightings.legId, kind: sightings.kind, place: sightings.place, retractedAt: sightings.retractedAt, byUserId: sightings.byUserId, enteredFor: sightings.enteredFor, legSeq: legs.seq }).from(sightings)
     .innerJoin(legs, eq(legs.id, sightings.legId)).where(eq(sightings.moveId, ctx.move.id));
   const said = all.find((one) => one.id === sightingId);
   if (!said || said.legId !== legId) throw new AppError("not_found", "No such sighting on this leg.");
+  if (replacedBy && !enteredFor) refuse(denyTakingBack(ctx.parts, legId, await saidByReceiver(ctx, said)));
   const plain = (one: (typeof all)[number]) => ({ kind: one.kind, legSeq: one.legSeq, retracted: one.retractedAt !== null });
   const [arrival] = await ctx.tx.select({ id: arrivals.id }).from(arrivals).where(eq(arrivals.moveId, ctx.move.id));
   refuse(denyRetraction(plain(said), all.filter((one) => one.id !== sightingId).map(plain), Boolean(arrival), replacedBy));
@@ -145,14 +147,17 @@ async function retract(ctx: MoveWrite, { sightingId, legId, why, replacedBy }: R
   return said;
 }
 
+async function saidByReceiver(ctx: MoveWrite, said: { byUserId: string; enteredFor: EnteredFor | null }): Promise<boolean> {
+  return !said.enteredFor && (await peopleIn(ctx.tx, ctx.move.id, { part: "receiver" })).some((person) => person.userId === said.byUserId);
+}
+
 /** Takes back a sighting that was wrong; it stays on record as retracted. */
 export async function retractSighting(viewer: Viewer, input: RetractSighting, attempt: Attempt) {
   return writeOnMove(viewer, attempt, input.moveId, async (ctx) => {
-    const [found] = await ctx.tx.select({ legId: sightings.legId, kind: sightings.kind }).from(sightings).where(and(eq(sightings.id, input.sightingId), eq(sightings.moveId, ctx.move.id)));
+    const [found] = await ctx.tx.select({ legId: sightings.legId, byUserId: sightings.byUserId, enteredFor: sightings.enteredFor }).from(sightings).where(and(eq(sightings.id, input.sightingId), eq(sightings.moveId, ctx.move.id)));
     if (!found) throw new AppError("not_found", "No such sighting on this move.");
     const { leg, enteredFor } = await allowOnLeg(ctx, "movement.sight", found.legId, input.enteredFor);
-    const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
-    if (!enteredFor) refuse(denyAsReceiver(ctx.parts, facts, legOf(facts, leg.id), found.kind));
+    if (!enteredFor) refuse(denyTakingBack(ctx.parts, leg.id, await saidByReceiver(ctx, found)));
     const said = await retract(ctx, { sightingId: input.sightingId, legId: leg.id, why: input.why });
     await ctx.append({ kind: "sighting.retracted", legId: leg.id, enteredFor, detail: { sightingId: said.id, sighting: said.kind, place: said.place, why: input.why, carrier: leg.carrierName } });
     return { sightingId: said.id };

@@ -14,7 +14,7 @@ import { unsafeGatherFacts } from "@/lib/standing/queries";
 import { denyClosing } from "@/lib/standing/rules";
 import type { LegFacts, MoveFacts } from "@/lib/standing/types";
 import type { Viewer } from "@/lib/viewer/types";
-import { denyAsReceiver, kindsFor, kindsForReceiver, speaksForCarrier } from "./rules";
+import { denyTakingBack, kindsFor, kindsForReceiver, speaksForCarrier } from "./rules";
 import type { ArrivalView, Movement, MovementLeg, SightingView } from "./types";
 
 /** What the transport desks, owner and receiver work with: instruction, release, sightings, arrival, closing. */
@@ -30,7 +30,7 @@ export async function getMovement(viewer: Viewer, moveId: string, now = new Date
   return {
     unit: `${unit?.mark ?? ""} ${unit?.number ?? ""}`.trim(),
     legs,
-    sightings: await sightingViews(move, parts, facts, legs),
+    sightings: await sightingViews(move, parts, legs, facts.arrived),
     arrival: maySee(parts, "findings") ? await arrivalView(moveId) : null,
     arrived: facts.arrived,
     destination: { name: move.destinationName, place: move.destinationPlace, zone: move.destinationZone },
@@ -90,22 +90,19 @@ function mayOnLeg(move: SeenMove, parts: HeldPart[], facts: MoveFacts, leg: LegF
   };
 }
 
-async function sightingViews(move: SeenMove, parts: HeldPart[], facts: MoveFacts, legs: MovementLeg[]): Promise<SightingView[]> {
+async function sightingViews(move: SeenMove, parts: HeldPart[], legs: MovementLeg[], arrived: boolean): Promise<SightingView[]> {
   const rows = await db().select().from(sightings).where(eq(sightings.moveId, move.id)).orderBy(asc(sightings.occurredAt), asc(sightings.id));
+  const receivers = new Set((await peopleIn(db(), move.id, { part: "receiver" })).map((person) => person.userId));
+  const receives = parts.some((held) => held.part === "receiver");
+  const standIn = new Set(legs.filter((leg) => leg.may.enterFor).map((leg) => leg.legId));
+  const open = move.state === "open" && !arrived;
   const photos = await unsafePhotosOf(db(), "sighting", rows.map((row) => row.id));
   return rows.map((row) => ({
     id: row.id, legId: row.legId, kind: row.kind, place: row.place, zone: row.zone, occurredAt: row.occurredAt.toISOString(), train: row.train, note: row.note, byName: row.byName,
     enteredFor: row.enteredFor, at: row.at.toISOString(), corrects: row.corrects, retracted: row.retractedAt ? { at: row.retractedAt.toISOString(), why: row.retractedWhy ?? "" } : null,
     photos: maySee(parts, "findings") ? (photos.get(row.id) ?? []) : [],
-    mayRetract: move.state === "open" && !row.retractedAt && !facts.arrived && mayTakeBack(parts, facts, legs, row),
+    mayRetract: open && !row.retractedAt && (standIn.has(row.legId) || denyTakingBack(parts, row.legId, receives && !row.enteredFor && receivers.has(row.byUserId)) === null),
   }));
-}
-
-function mayTakeBack(parts: HeldPart[], facts: MoveFacts, legs: MovementLeg[], { legId, kind }: Pick<SightingView, "legId" | "kind">): boolean {
-  const own = facts.legs.find((leg) => leg.legId === legId);
-  if (!own) return false;
-  if (legs.find((leg) => leg.legId === legId)?.may.enterFor) return true;
-  return denyAction(parts, { action: "movement.sight", legId }) === null && denyAsReceiver(parts, facts, own, kind) === null;
 }
 
 async function arrivalView(moveId: string): Promise<ArrivalView | null> {

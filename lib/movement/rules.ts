@@ -55,6 +55,12 @@ export function denyAsReceiver(parts: readonly HeldPart[], move: MoveFacts, leg:
   return { code: "not_your_part", message: "The receiver records what happens at arrival, on the last leg; the rest is the carrier’s to say." };
 }
 
+/** Null when somebody who does not speak for the leg's carrier may take this back: only what the receiver's own people said. */
+export function denyTakingBack(parts: readonly HeldPart[], legId: string, saidByReceiver: boolean): Denial | null {
+  if (speaksForCarrier(parts, legId) || saidByReceiver) return null;
+  return { code: "not_your_part", message: "The receiver takes back what its own people recorded; the rest is the carrier’s to take back." };
+}
+
 /** A look at the unit can't lie ahead. Days are those of the destination. */
 export function denyArrivalDay(arrivedOn: string, today: string): Denial | null {
   if (arrivedOn <= today) return null;
