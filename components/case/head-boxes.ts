@@ -38,7 +38,7 @@ function dateBox({ unit }: CaseFile): Omit<CardHeadBox, "span"> | null {
 function openBox(file: CaseFile): Omit<CardHeadBox, "span"> {
   const days = daysOpen(file.openedAt, file.endedAt, file.at);
   const label = file.state === "closed" ? "Was open for" : file.state === "cancelled" ? "Cancelled after" : "Open for";
-  return { label, value: days === 1 ? "1 day" : `${days} days`, detail: daysWords(file.days) || null, mono: true };
+  return { label, value: days === 0 ? "Under a day" : days === 1 ? "1 day" : `${days} days`, detail: daysWords(file.days) || null, mono: true };
 }
 
 function waitingBox(file: CaseFile): Omit<CardHeadBox, "span"> {

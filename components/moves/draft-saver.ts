@@ -1,8 +1,6 @@
 import { CallError } from "@/lib/entry/fetcher";
 import { readForm, type DraftForm } from "@/lib/moves/draft";
-import type { Draft } from "@/lib/moves/types";
-
-type Saved = { draftId: string; version: number; updatedAt: string };
+import type { Draft, SavedDraft } from "@/lib/moves/types";
 
 /** How keeping stands: `unsent` means that the page holds more than the server. */
 export type SaveStatus =
@@ -15,8 +13,8 @@ export type SaveStatus =
 
 /** The calls that a saver makes. */
 export type SaverCalls = {
-  begin: (companyId: string, body: DraftForm, key: string) => Promise<Saved>;
-  save: (draftId: string, companyId: string, body: DraftForm, version: number) => Promise<Saved>;
+  begin: (companyId: string, body: DraftForm, key: string) => Promise<SavedDraft>;
+  save: (draftId: string, companyId: string, body: DraftForm, version: number) => Promise<SavedDraft>;
   read: (draftId: string) => Promise<Draft>;
   /** Told once, when a new draft got its id. */
   began: (draftId: string) => void;

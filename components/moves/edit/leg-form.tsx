@@ -52,14 +52,14 @@ function LegForm({ moveId, leg: current, last, ownerName, onDone }: LegFormProps
   };
   const own = (name: string) => ({ id: `${leg.legId}-${name}`, name });
   return (
-    <form noValidate onSubmit={submit} className="mt-3 grid gap-5 sm:grid-cols-2">
+    <form noValidate onSubmit={submit} className="mt-3 grid gap-5 sm:grid-cols-2 sm:items-start">
       <div className="sm:col-span-2">
         <SaveState error={save.error} saved={false} linked={false} />
       </div>
-      <TextField {...own("carrierName")} label="Carrier" hint={leg.carrierFixedBecause ?? "Another carrier than before has to be invited anew, or entered for."} required readOnly={leg.carrierFixedBecause !== null} autoComplete="off" value={values.carrierName} onChange={(event) => set({ carrierName: event.target.value })} error={errorOf("carrierName")} />
+      <TextField {...own("carrierName")} label="Carrier" hint={leg.carrierFixedBecause ?? "Another one than before has to be invited anew, or entered for."} required readOnly={leg.carrierFixedBecause !== null} autoComplete="off" value={values.carrierName} onChange={(event) => set({ carrierName: event.target.value })} error={errorOf("carrierName")} />
       <div className="grid grid-cols-2 gap-5">
-        <TextField {...own("carrierMark")} label="Its code" mono readOnly={leg.fixedBecause !== null} maxLength={4} autoComplete="off" value={values.carrierMark} onChange={(event) => set({ carrierMark: event.target.value })} error={errorOf("carrierMark")} />
-        <TextField {...own("miles")} label="Miles" mono readOnly={leg.fixedBecause !== null} inputMode="numeric" autoComplete="off" value={values.miles} onChange={(event) => set({ miles: event.target.value })} error={errorOf("miles")} />
+        <TextField {...own("carrierMark")} label="Its code" hint="Up to four letters." mono readOnly={leg.fixedBecause !== null} maxLength={4} autoComplete="off" value={values.carrierMark} onChange={(event) => set({ carrierMark: event.target.value })} error={errorOf("carrierMark")} />
+        <TextField {...own("miles")} label="Miles" hint="As far as known." mono readOnly={leg.fixedBecause !== null} inputMode="numeric" autoComplete="off" value={values.miles} onChange={(event) => set({ miles: event.target.value })} error={errorOf("miles")} />
       </div>
       {!last && <TextField {...own("toPlace")} label="Interchange with the next carrier" required readOnly={leg.fixedBecause !== null} autoComplete="off" value={values.toPlace} onChange={(event) => set({ toPlace: event.target.value })} error={errorOf("toPlace")} />}
       {!last && <ZoneField name={`${leg.legId}-toZone`} required disabled={leg.fixedBecause !== null} value={values.toZone} onChange={(toZone) => set({ toZone })} error={errorOf("toZone")} />}

@@ -9,6 +9,7 @@ import { FormErrors } from "@/components/ui/form-errors";
 import { SelectField } from "@/components/ui/select-field";
 import { CallError } from "@/lib/entry/fetcher";
 import { emptyDraft, readForm, toOpening, type DraftForm } from "@/lib/moves/draft";
+import { fieldWords } from "@/lib/moves/field-words";
 import { beginDraft, moveKeys, openMoveMutation, readDraft, saveDraft } from "@/lib/moves/options";
 import type { Draft } from "@/lib/moves/types";
 import { routes } from "@/lib/routes";
@@ -20,6 +21,9 @@ import { ReviewSection } from "./review-section";
 import { RouteSection } from "./route-section";
 import { UnitSection } from "./unit-section";
 import { WhenSection } from "./when-section";
+
+/** A fault in the list at the top names its field, where several fields can have the same fault. */
+const faultLine = (name: string, message: string) => (name.startsWith("answers.") ? message : `${fieldWords(name)}: ${message.charAt(0).toLowerCase()}${message.slice(1)}`);
 
 export type OwnCompany = { companyId: string; companyName: string };
 export type MoveFormProps = { companies: readonly OwnCompany[]; draft: Draft | null };
@@ -84,7 +88,7 @@ export function MoveForm({ companies, draft }: MoveFormProps) {
     event.preventDefault();
     if (!open.isPending && !open.isSuccess) void start(form);
   };
-  const faults = Object.entries(fields).flatMap(([name, messages]) => messages.map((message) => ({ name, message })));
+  const faults = Object.entries(fields).flatMap(([name, messages]) => messages.map((message) => ({ name, message: faultLine(name, message) })));
   return (
     <form noValidate onSubmit={submit} className="grid gap-6">
       <DraftState status={status} onKeepAnew={() => saver.keepAnew()} />

@@ -22,7 +22,7 @@ describe("a move to be opened", () => {
   it("is taken as typed, trimmed, with figures without commas and codes in capitals", () => {
     const parsed = openMoveInput.parse(good);
     expect(parsed.answers).toMatchObject({ mark: "ZVRX", weight: "362400" });
-    expect(parsed.legs).toMatchObject([{ carrierMark: "ZQSR", miles: 174 }, { carrierMark: null, miles: null, toPlace: "Quill Creek" }]);
+    expect(parsed.legs).toMatchObject([{ carrierMark: "ZQSR", miles: 174 }, { carrierMark: null, miles: null }]);
     expect(parsed).toMatchObject({ draftId: null, wantedFrom: "2027-01-04", wantedTo: null, note: null });
   });
 
@@ -46,6 +46,9 @@ describe("a move to be opened", () => {
   });
 
   it.each([[{ ...good, legs: [] }, "legs"], [{ ...good, legs: "none" }, "legs"], [{ ...good, secret: 1 }, "secret"], [{ ...good, answers: { ...good.answers, mark: "Z\u0007" } }, "answers.mark"], [{ ...good, answers: { ...good.answers, mark: "Z\nX" } }, "answers.mark"]])("is refused: %#", (given, path) => expect(faults(given)).toHaveProperty([path]));
+
+  it("finds no fault with where the last leg ends when the destination is empty", () =>
+    expect(Object.keys(faults({ ...good, destination: { name: "", place: "", zone: "" } })).sort()).toEqual(["destination.name", "destination.place", "destination.zone"]));
 
   it("may leave bearings, coupler and brakes open", () => expect(faults({ ...good, answers: { ...good.answers, bearings: "", coupler: "", brakes: "" } })).toEqual({}));
 });
