@@ -1,10 +1,12 @@
 import { afterAll, describe, expect, it } from "vitest";
 import { AppError } from "@/lib/errors";
+import { unsafeFollow } from "@/lib/timeline/queries";
 import { openBench } from "../integration/fees/bench";
 import { withDatabase } from "../support/database";
 import { rich } from "./build";
 import { fingerprint } from "./fingerprint";
 import { OUTSIDE, SEATED, type Persona } from "./personas";
+import { FOLLOW_TOKEN } from "./rich";
 import type { Ready, Row } from "./row";
 import { leaksIn, saidBy } from "./secrets";
 import { TABLE } from "./table";
@@ -114,4 +116,12 @@ it("every secret of the rich case is found by somebody who may read it", async (
   const { secrets } = await rich();
   const unread = secrets.filter(({ may, texts }) => may.length > 0 && !texts.some((text) => read.has(text)));
   expect(unread.map(({ what }) => what)).toEqual([]);
+});
+
+it("a link to follow tells of no person, no money and no other secret", async () => {
+  const { people, secrets } = await rich();
+  const said = JSON.stringify(await unsafeFollow(FOLLOW_TOKEN, new Date()));
+  expect(said).toContain("Quillan & Sandbar");
+  const names = Object.values(people).map(({ name }) => name);
+  expect([...names, ...secrets.flatMap(({ texts }) => texts)].filter((text) => said.includes(text))).toEqual([]);
 });

@@ -16,6 +16,9 @@ import { arrived, drafted, itemOf, sessionOf } from "./steps";
 /** A case that has come a long way and holds every kind of secret, for reads alone. */
 export type Rich = Case & { findingId: string; photoId: string; draftId: string; quoteId: string; sessionId: string; paymentSession: string };
 
+/** Opens the rich case to a notify party. */
+export const FOLLOW_TOKEN = "notify-party-of-the-rich-case";
+
 const NOBODY: readonly Persona[] = [];
 const A_MONEY: readonly Persona[] = ["owner", "payer", "clerkA"];
 const B_MONEY: readonly Persona[] = ["owner", "clerkB"];
@@ -58,7 +61,7 @@ async function withKeys(of: Case): Promise<Secret[]> {
   const at = new Date();
   const soon = new Date(Date.now() + 24 * 3600_000);
   const shared = { createdAt: at, expiresAt: soon };
-  const [letter, follow, password, token] = [sha256Hex("letter of invitation"), sha256Hex("link to follow"), "scrypt$indigo$hash", "indigo-session-token"];
+  const [letter, follow, password, token] = [sha256Hex("letter of invitation"), sha256Hex(FOLLOW_TOKEN), "scrypt$indigo$hash", "indigo-session-token"];
   const [seat] = await db().select({ id: moveSeats.id }).from(moveSeats).where(and(eq(moveSeats.moveId, of.moveId), eq(moveSeats.part, "receiver")));
   await db().insert(invitations).values({ ...shared, id: newId("invitation"), moveId: of.moveId, seatId: seat?.id ?? null, companyId: of.companies.receiver, email: "ocker-invited@example.test", tokenHash: letter, invitedBy: owner.userId });
   await db().insert(followLinks).values({ ...shared, id: newId("follow"), moveId: of.moveId, label: "The museum’s friends", email: "ocker-follows@example.test", tokenHash: follow, createdBy: owner.userId });

@@ -36,7 +36,7 @@ export type Row = {
   hiddenCode: Refusal;
   /** Outsiders whom something else stops before. */
   told: Partial<Record<Persona, Refusal>>;
-  /** True for what neither policy nor scope has a say in: it asks who the viewer is, and nothing else. */
+  /** True for what neither policy nor scope has a say in: it asks who the viewer is or which companies are theirs, and nothing else. */
   own: boolean;
   /** False for what names nothing by id, so that it can't be asked about nothing. */
   named: boolean;

@@ -12,7 +12,7 @@ const works = { inspects: true, bills: false, dispatches: false };
 const noSeed = async () => ({});
 
 export const companyRows = [
-  query({ name: "listCompanies", right: [...MEMBERS, "guest"], open: true, needle: ({ carrierId }) => carrierId, run: (viewer) => listCompanies(viewer) }),
+  query({ name: "listCompanies", right: [...MEMBERS, "guest"], open: true, own: true, needle: ({ carrierId }) => carrierId, run: (viewer) => listCompanies(viewer) }),
   query({
     name: "getCompany", right: MEMBERS, hidden: seatedBut(...MEMBERS), shows: { what: /address of (?:inspectorA|clerkA|deskA|guest)$/, to: ["deskA"] },
     run: (viewer, { carrierId }) => getCompany(viewer, carrierId),

@@ -15,7 +15,7 @@ export const evidenceRows = [
   query({ name: "getPhotoKey", as: "of the preview", right: SEE_WORK, shows: { what: /file’s key/, to: SEE_WORK }, run: (viewer, { moveId, photoId }) => getPhotoKey(viewer, moveId, photoId, "preview") }),
   step({ name: "announcePhoto", right: SEE_WORK, seed: async () => ({}), run: (viewer, { moveId }) => announcePhoto(viewer, { ...picture, moveId, clientId: crypto.randomUUID(), sha256: sha256Hex("front") }, anAttempt()) }),
   step({
-    name: "requireSending", right: ["contractor"], hidden: seatedBut("contractor"),
+    name: "requireSending", right: ["contractor"], hidden: seatedBut("contractor"), own: true,
     seed: async (of) => ({ photoId: await photographed(of, of.people.contractor, { state: "registered", proofKey: null, originalKey: null, previewKey: null }) }),
     run: (viewer, { photoId }) => requireSending(viewer, photoId, "original", { type: picture.type, size: picture.sizeBytes }),
   }),

@@ -18,7 +18,7 @@ const toColleague = async (of: Case) => ({ invitationId: await invited(of, of.co
 
 export const partyRows = [
   query({ name: "getPeople", right: SEATED, run: (viewer, { moveId }) => getPeople(viewer, moveId) }),
-  query({ name: "listKnownCompanies", right: seatedBut("guest"), open: true, needle: () => "Alder Gap Museum", run: (viewer) => listKnownCompanies(viewer) }),
+  query({ name: "listKnownCompanies", right: seatedBut("guest"), open: true, own: true, needle: () => "Alder Gap Museum", run: (viewer) => listKnownCompanies(viewer) }),
   step({
     name: "inviteParty", right: ["owner"], seed: async () => ({}),
     run: (viewer, { moveId, legA }) => inviteParty(viewer, { moveId, part: "payer", legId: legA, companyId: null, companyName: "Tallow Fund", email: "fund@example.test", name: null, inspects: false, bills: false, dispatches: false }, anAttempt()),
