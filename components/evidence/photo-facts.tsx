@@ -16,7 +16,7 @@ export function PhotoFacts({ photo }: { photo: PhotoView }) {
         <Box label="Taken" span={6} detail={capturedAt ? "As the picture says" : null}>
           {capturedAt ? formatFullWhen(capturedAt, zone) : state ? "Read when the original is here" : "The picture does not say"}
         </Box>
-        <Box label="Announced" span={6} detail={`${takenBy}, ${takenByCompany}`}>
+        <Box label="On file since" span={6} detail={`${takenBy}, ${takenByCompany}`}>
           {formatFullWhen(at, zone)}
         </Box>
         <Box label="Camera" span={6}>

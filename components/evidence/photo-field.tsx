@@ -44,7 +44,7 @@ export function PhotoField({ moveId, label, hint, value, onChange, error }: Phot
     input.value = "";
     const room = PHOTOS_PER_SUBJECT - value.length - own.length;
     setOver(files.length > room);
-    void pageQueue().add(moveId, id, files.slice(0, Math.max(0, room)));
+    void pageQueue().add(moveId, id, files.slice(0, Math.max(0, room)), value.map(({ sha256 }) => sha256));
   };
 
   const remove = (photo: PhotoView) => {

@@ -24,7 +24,7 @@ export function PhotoStrip({ photos }: { photos: PhotoView[] }) {
           </li>
         ))}
       </ul>
-      <Dialog open={open !== undefined} onClose={() => setOpenId(null)} title={<span className="[overflow-wrap:anywhere]">{open?.name}</span>}>
+      <Dialog wide open={open !== undefined} onClose={() => setOpenId(null)} title={<span className="[overflow-wrap:anywhere]">{open?.name}</span>}>
         {open && (
           <>
             {/* eslint-disable-next-line @next/next/no-img-element -- private, through a door that redirects to another address each time */}

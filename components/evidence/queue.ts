@@ -13,6 +13,7 @@ export type Entry = Sending & {
   /** The form field that waits for it; null once the field has it, or when the page was loaded anew. */
   field: string | null;
   name: string;
+  sha256: string | null;
   proof: Blob | null;
   photo: PhotoView | null;
   /** The phone could not keep it, so closing the page would lose it. */
@@ -30,7 +31,7 @@ export type QueueParts = {
   alone: (clientId: string, run: () => Promise<void>) => Promise<boolean>;
 };
 
-type Job = Pick<Unsent, "clientId" | "moveId" | "addresses"> & { prepared: Prepared; announced: Announced | null; tries: number; dueAt: number; abort: AbortController | null };
+type Job = Pick<Unsent, "clientId" | "moveId" | "addresses" | "at"> & { prepared: Prepared; announced: Announced | null; tries: number; dueAt: number; abort: AbortController | null };
 
 const YIELD = "a proof goes first";
 const CANCEL = "cancelled";
@@ -58,29 +59,34 @@ export class UploadQueue {
   async openFor(userId: string): Promise<void> {
     if (this.#userId === userId) return;
     this.#userId = userId;
-    for (const { clientId, moveId, prepared, addresses } of await this.parts.store.list(userId).catch(() => [])) {
+    for (const { clientId, moveId, prepared, addresses, at } of await this.parts.store.list(userId).catch(() => [])) {
       if (this.#jobs.has(clientId)) continue;
-      this.#show({ clientId, moveId, field: null, name: prepared.name, proof: prepared.proof, photo: null, onlyHere: false, step: "waiting", percent: 0, proofSent: false, fault: null });
-      this.#jobs.set(clientId, { clientId, moveId, prepared, addresses, announced: null, tries: 0, dueAt: 0, abort: null });
+      this.#show({ clientId, moveId, field: null, name: prepared.name, sha256: prepared.sha256, proof: prepared.proof, photo: null, onlyHere: false, step: "waiting", percent: 0, proofSent: false, fault: null });
+      this.#jobs.set(clientId, { clientId, moveId, prepared, addresses, at, announced: null, tries: 0, dueAt: 0, abort: null });
     }
     void this.#pump();
   }
 
-  /** Takes chosen files; each shows up at once and is sent when its turn comes. */
-  async add(moveId: string, field: string, files: readonly File[]): Promise<void> {
+  /** Takes chosen files; each shows up at once and is sent when its turn comes. The field has photos with the hashes `had` already. */
+  async add(moveId: string, field: string, files: readonly File[], had: readonly string[] = []): Promise<void> {
+    const known = new Set(had);
     const chosen = files.map((file) => ({ file, clientId: crypto.randomUUID() }));
-    for (const { file, clientId } of chosen) this.#show({ clientId, moveId, field, name: file.name, proof: null, photo: null, onlyHere: false, step: "preparing", percent: 0, proofSent: false, fault: null });
+    for (const { file, clientId } of chosen) this.#show({ clientId, moveId, field, name: file.name, sha256: null, proof: null, photo: null, onlyHere: false, step: "preparing", percent: 0, proofSent: false, fault: null });
     // One after the other: opening several large pictures at once is more than a phone's memory takes.
-    for (const { file, clientId } of chosen) await this.#prepare(clientId, moveId, file);
+    for (const { file, clientId } of chosen) await this.#prepare(clientId, moveId, file, known);
   }
 
-  async #prepare(clientId: string, moveId: string, file: File): Promise<void> {
+  async #prepare(clientId: string, moveId: string, file: File, known: Set<string>): Promise<void> {
     try {
       const prepared = await this.parts.prepare(file);
-      if (!this.#entry(clientId)) return;
-      const job: Job = { clientId, moveId, prepared, addresses: {}, announced: null, tries: 0, dueAt: 0, abort: null };
+      const entry = this.#entry(clientId);
+      if (!entry) return;
+      const { sha256 } = prepared;
+      if (known.has(sha256) || this.#entries.some((other) => other.field === entry.field && other.sha256 === sha256)) throw new PhotoFault("This picture is here already.");
+      known.add(sha256);
+      const job: Job = { clientId, moveId, prepared, addresses: {}, at: this.parts.now(), announced: null, tries: 0, dueAt: 0, abort: null };
       this.#jobs.set(clientId, job);
-      this.#change(clientId, { step: "waiting", name: prepared.name, proof: prepared.proof, onlyHere: !(await this.#save(job)) });
+      this.#change(clientId, { step: "waiting", name: prepared.name, sha256, proof: prepared.proof, onlyHere: !(await this.#save(job)) });
     } catch (error) {
       this.#change(clientId, { step: "refused", fault: error instanceof PhotoFault ? error.message : "This browser could not open the picture." });
       return;
@@ -89,10 +95,10 @@ export class UploadQueue {
     void this.#pump();
   }
 
-  async #save({ clientId, moveId, prepared, addresses }: Job): Promise<boolean> {
+  async #save({ clientId, moveId, prepared, addresses, at }: Job): Promise<boolean> {
     const userId = this.#userId;
     if (!userId) return false;
-    return this.parts.store.save({ clientId, userId, moveId, prepared, addresses, at: this.parts.now() }).then(() => true, () => false);
+    return this.parts.store.save({ clientId, userId, moveId, prepared, addresses, at }).then(() => true, () => false);
   }
 
   /** The field has taken the photo over; true the first time. */

@@ -11,7 +11,8 @@ export function UploadQueue({ userId }: { userId: string }) {
   const entries = useEntries();
   const words = wordsOfQueue(entries);
   const unsent = words !== null;
-  const shown = entries.filter(({ step }) => step !== "done");
+  // A refused file is shown by the field that it was chosen in.
+  const shown = entries.filter(({ step, field }) => step !== "done" && (step !== "refused" || field === null));
 
   useEffect(() => {
     void pageQueue().openFor(userId);

@@ -1,5 +1,6 @@
 "use client";
 
+import { clsx } from "clsx";
 import { useEffect, useId, useRef, type ReactNode } from "react";
 
 export type DialogProps = {
@@ -10,10 +11,12 @@ export type DialogProps = {
   children: ReactNode;
   /** The buttons at the end; the one that does it last. */
   actions?: ReactNode;
+  /** As wide as there is room, for a picture. */
+  wide?: boolean;
 };
 
 /** A native modal dialog: the browser keeps the focus inside and gives it back to what opened it. */
-export function Dialog({ open, onClose, title, children, actions }: DialogProps) {
+export function Dialog({ open, onClose, title, children, actions, wide = false }: DialogProps) {
   const dialog = useRef<HTMLDialogElement>(null);
   const id = useId();
   // showModal exists only as a method, so the property has to be carried over to the element.
@@ -32,7 +35,7 @@ export function Dialog({ open, onClose, title, children, actions }: DialogProps)
         event.preventDefault();
         onClose();
       }}
-      className="m-auto max-h-[calc(100dvh-32px)] w-[min(560px,calc(100vw-24px))] overflow-y-auto border-2 border-ink bg-sheet p-0 text-ink"
+      className={clsx("m-auto max-h-[calc(100dvh-32px)] overflow-y-auto border-2 border-ink bg-sheet p-0 text-ink", wide ? "w-[min(1100px,calc(100vw-24px))]" : "w-[min(560px,calc(100vw-24px))]")}
     >
       {open && (
         <>

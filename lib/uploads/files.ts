@@ -91,14 +91,19 @@ async function copyTo(key: string, path: string, maxBytes: number): Promise<Fetc
 }
 
 /** Stores a file of our own making under an id of ours, in the place of an earlier one; gives its key. */
-export async function keepFile(bytes: Uint8Array<ArrayBuffer>, { name, type, customId }: { name: string; type: string; customId: string }): Promise<string> {
+export async function keepFile(bytes: Uint8Array<ArrayBuffer>, { name, type, customId, download = false }: { name: string; type: string; customId: string; download?: boolean }): Promise<string> {
   await api().deleteFiles(customId, { keyType: "customId" });
-  const { data, error } = await api().uploadFiles(new UTFile([bytes], name, { type, customId }), { acl: "private", contentDisposition: "inline" });
-  if (error) throw new Error(`The file service did not take a preview: ${error.message}`);
+  const { data, error } = await api().uploadFiles(new UTFile([bytes], name, { type, customId }), { acl: "private", contentDisposition: download ? "attachment" : "inline" });
+  if (error) throw new Error(`The file service did not take a file: ${error.message}`);
   return data.key;
 }
 
 /** Deletes a file; one that is gone already is fine. */
 export async function dropFile(key: string): Promise<void> {
   await api().deleteFiles(key);
+}
+
+/** The same, by the id of ours that the file carries. */
+export async function dropOwn(customId: string): Promise<void> {
+  await api().deleteFiles(customId, { keyType: "customId" });
 }

@@ -16,7 +16,7 @@ export async function takePhoto(clock: DemoClock, viewer: Viewer, moveId: string
   const { photo } = await announcePhoto(viewer, { moveId, clientId: randomUUID(), name: picture.name, type: "image/jpeg", sizeBytes: bytes.byteLength, sha256, ...PICTURE_SIZE }, clock.attempt(at));
   const proof = Uint8Array.from(await sharp(bytes).resize(800).jpeg({ quality: 70 }).toBuffer());
   for (const [slot, file] of [["proof", proof], ["original", bytes]] as const) {
-    const key = await keepFile(file, { name: picture.name, type: "image/jpeg", customId: fileIdOf(photo.id, slot) });
+    const key = await keepFile(file, { name: picture.name, type: "image/jpeg", customId: fileIdOf(photo.id, slot), download: slot === "original" });
     await unsafeStoreFile(photo.id, slot, { key }, at);
   }
   await unsafeCheckPhoto(photo.id, at);

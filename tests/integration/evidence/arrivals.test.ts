@@ -3,7 +3,7 @@ import { and, asc, eq } from "drizzle-orm";
 import sharp from "sharp";
 import { describe, expect, it } from "vitest";
 import { db } from "@/db/client";
-import { outbox, record } from "@/db/schema";
+import { outbox, photos, record } from "@/db/schema";
 import { announcePhoto } from "@/lib/evidence/commands";
 import { unsafeStoreFile, unsafeSweepPhotos } from "@/lib/evidence/commands/arrivals";
 import { unsafeCheckPhoto } from "@/lib/evidence/commands/check";
@@ -189,6 +189,16 @@ describe("what is refused", () => {
     expect(row.refusedWhy).toMatch(words);
     expect((await fetch(`${yard.serviceUrl}/f/${key}`)).status).toBe(404);
     expect(await kinds(moveId)).toEqual(["photo.taken", "photo.refused"]);
+  });
+
+  it("its file goes on the next try when the file service was away", async () => {
+    const { moveId, contractor } = await seedMove();
+    const bytes = await aPicture({ seed: 15 });
+    const photoId = await announce(contractor, moveId, bytes, { sha256: "1".repeat(64) });
+    const { key } = await sendSlot(yard, contractor, photoId, "original", bytes);
+    await db().update(photos).set({ state: "refused", refusedWhy: "Its SHA-256 differs.", originalKey: null }).where(eq(photos.id, photoId));
+    await unsafeCheckPhoto(photoId, new Date());
+    expect((await fetch(`${yard.serviceUrl}/f/${key}`)).status).toBe(404);
   });
 
   it("a proof that is none", async () => {

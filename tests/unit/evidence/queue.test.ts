@@ -8,7 +8,7 @@ import type { Announced, PhotoView } from "@/lib/evidence/types";
 
 const file = (name: string) => new File(["x"], name, { type: "image/jpeg" });
 
-const prepared = (name: string): Prepared => ({ name, type: "image/jpeg", original: new Blob([name]), sizeBytes: name.length, sha256: "a".repeat(64), proof: new Blob(["p"]), widthPx: 4, heightPx: 3 });
+const prepared = (name: string): Prepared => ({ name, type: "image/jpeg", original: new Blob([name]), sizeBytes: name.length, sha256: `hash of ${name}`, proof: new Blob(["p"]), widthPx: 4, heightPx: 3 });
 
 const settle = async () => {
   for (let n = 0; n < 50; n += 1) await new Promise((resolve) => setTimeout(resolve, 1));
@@ -159,6 +159,14 @@ describe("what goes wrong", () => {
     await settle();
     expect(queue.snapshot()[0]).toMatchObject({ step: "refused", fault: "The file is empty." });
     expect(sends).toEqual([]);
+  });
+
+  it("the same picture twice in one field is taken once, also when the field has it already", async () => {
+    const { queue, steps } = aLine();
+    await queue.add("m", "f", [file("a"), file("a"), file("b")], ["hash of b"]);
+    await queue.add("m", "g", [file("a")]);
+    expect(steps()).toEqual(["a proof", "a refused", "b refused", "a waiting"]);
+    expect(queue.snapshot()[1]?.fault).toBe("This picture is here already.");
   });
 
   it("an original that the check refused is told in its words", async () => {
