@@ -42,7 +42,7 @@ function Row({ moveId, finding, now }: { moveId: string; finding: FindingView; n
       <Td mono className="max-sm:text-ink-2">{finding.label}</Td>
       <RowHead>
         <TextLink href={routes.finding(moveId, finding.id)} className="inline-flex items-center py-0.5 font-[680] max-sm:min-h-11 max-sm:text-17">{finding.component}</TextLink>
-        {finding.where && <span className="block text-ink-2">{finding.where}</span>}
+        {finding.where && finding.where !== finding.component && <span className="block text-ink-2">{finding.where}</span>}
         <span className={severity === "stops-move" && !isOver(state) ? "block font-[620] text-oxide" : "block text-ink-2"}>{SEVERITY_LABELS[severity]}</span>
       </RowHead>
       <Td label="Found">
