@@ -13,7 +13,7 @@ export default async function FrontLayout({ children }: { children: ReactNode })
     <>
       <SkipLink />
       <TopBar homeHref={routes.home()} nav={[]}>
-        {viewer ? <BarLink href={routes.moves()}>Moves of {viewer.name}</BarLink> : <BarLink href={routes.signIn()}>Sign in</BarLink>}
+        {viewer ? <BarLink href={routes.moves()}>Your moves</BarLink> : <BarLink href={routes.signIn()}>Sign in</BarLink>}
       </TopBar>
       {children}
       <Footer />

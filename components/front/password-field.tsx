@@ -4,7 +4,7 @@ import { useState } from "react";
 import { useFormStatus } from "react-dom";
 import { describeField, FieldFrame, type FieldProps } from "@/components/ui/field";
 
-type PasswordFieldProps = FieldProps & { autoComplete: "current-password" | "new-password"; autoFocus?: boolean; value?: string; onChange?: (typed: string) => void };
+type PasswordFieldProps = FieldProps & { autoComplete: "current-password" | "new-password"; value?: string; onChange?: (typed: string) => void };
 
 /** A password, hidden unless asked; what was typed stays in the field when the form comes back with an error. */
 export function PasswordField({ label, hint, error, required, className, name, id, autoComplete, value, onChange }: PasswordFieldProps) {

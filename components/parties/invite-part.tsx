@@ -9,27 +9,31 @@ import { Notice } from "@/components/ui/notice";
 import { SelectField } from "@/components/ui/select-field";
 import { Sheet } from "@/components/ui/sheet";
 import { TextField } from "@/components/ui/text-field";
-import { slotsOf } from "@/lib/parties/choices";
+import { slotsOf, type SlotChoice } from "@/lib/parties/choices";
 import { invitePartyMutation } from "@/lib/parties/options";
 import type { PeopleView } from "@/lib/parties/types";
 
 const NEW = "new";
 const EMPTY = { slot: "", company: "", companyName: "", email: "", name: "", ...NO_WORKS };
 
-/** Invites a company, by one of its people, into a part of the move. */
-export function InvitePart({ moveId, people }: { moveId: string; people: PeopleView }) {
-  const [given, setGiven] = useState(EMPTY);
-  const invite = useWrite(invitePartyMutation(moveId));
+type InvitePartProps = { moveId: string; people: PeopleView; start: string };
+
+/** The form filled for a part: its company is the one that holds it, or is named for it. */
+const filledFor = (slots: SlotChoice[], value: string, typed = EMPTY) => {
+  const slot = slots.find((one) => one.value === value);
+  return { ...typed, slot: value, company: slot?.companyId || NEW, companyName: slot?.companyName ?? "" };
+};
+
+/** Invites a company, by one of its people, into a part of the move; `start` is the part that was asked for in the table. */
+export function InvitePart({ moveId, people, start }: InvitePartProps) {
   const slots = slotsOf(people);
+  const [given, setGiven] = useState(() => (start ? filledFor(slots, start) : EMPTY));
+  const invite = useWrite(invitePartyMutation(moveId));
   const slot = slots.find((one) => one.value === given.slot);
   const holder = slot ? people.parties.find((one) => one.part === slot.part && one.legId === (slot.legId || null)) : undefined;
   const own = people.known.some((one) => one.own && one.companyId === given.company);
   const { field } = invite.faults;
   const type = (name: "companyName" | "email" | "name") => ({ name, value: given[name], error: field(name), onChange: (event: { target: { value: string } }) => setGiven({ ...given, [name]: event.target.value }) });
-  const chooseSlot = (value: string) => {
-    const next = slots.find((one) => one.value === value);
-    setGiven({ ...given, slot: value, company: next?.companyId || NEW, companyName: next?.companyName ?? "" });
-  };
   const submit = (event: FormEvent) => {
     event.preventDefault();
     const { slot: _slot, company, companyName, ...rest } = given;
@@ -42,7 +46,7 @@ export function InvitePart({ moveId, people }: { moveId: string; people: PeopleV
       <form noValidate onSubmit={submit} className="grid max-w-[560px] gap-4">
         <FormErrors errors={invite.faults.list.map((fault) => (fault.name === "part" ? { ...fault, name: "slot" } : fault))} title="Nobody was invited." />
         {invite.done && given === EMPTY && <Notice kind="done" live="status">Done. The list above shows it.</Notice>}
-        <SelectField name="slot" label="Part" required blank="choose" choices={slots} value={given.slot} onChange={(event) => chooseSlot(event.target.value)} error={field("part") ?? field("legId")} />
+        <SelectField name="slot" label="Part" required blank="choose" choices={slots} value={given.slot} onChange={(event) => setGiven(filledFor(slots, event.target.value, given))} error={field("part") ?? field("legId")} />
         {holder ? (
           <p className="text-14 text-ink-2">{holder.companyName} has this part; you invite one more of its people. For another company, take this one off first{holder.part === "payer" ? ", or choose it below" : ""}.</p>
         ) : null}

@@ -2,6 +2,7 @@
 
 import { ConfirmButton } from "@/components/account/confirm-button";
 import { useWrite } from "@/components/account/use-write";
+import { Button } from "@/components/ui/button";
 import { State } from "@/components/ui/state";
 import { Table, Td, Th } from "@/components/ui/table";
 import { PART_LABELS } from "@/lib/access/vocabulary";
@@ -11,7 +12,7 @@ import type { Party, PartyLeg, PeopleView } from "@/lib/parties/types";
 import { worksWords } from "@/lib/parties/words";
 
 /** Companies by part, with those parts that nobody holds yet. */
-export function PartyTable({ moveId, people, edits }: { moveId: string; people: PeopleView; edits: boolean }) {
+export function PartyTable({ moveId, people, edits, onInvite }: { moveId: string; people: PeopleView; edits: boolean; onInvite: (slot: string) => void }) {
   const legOf = (legId: string | null) => people.legs.find((leg) => leg.legId === legId) ?? null;
   return (
     <Table caption="Companies on this move" stack>
@@ -19,7 +20,7 @@ export function PartyTable({ moveId, people, edits }: { moveId: string; people: 
         <tr><Th>Part</Th><Th>Company</Th><Th>People</Th>{edits && <Th><span className="sr-only">Changes</span></Th>}</tr>
       </thead>
       <tbody>
-        {partyRows(people).map((row) => ("party" in row ? <SeatedRow key={row.key} moveId={moveId} party={row.party} leg={legOf(row.party.legId)} edits={edits} /> : <MissingRow key={row.key} row={row} edits={edits} />))}
+        {partyRows(people).map((row) => ("party" in row ? <SeatedRow key={row.key} moveId={moveId} party={row.party} leg={legOf(row.party.legId)} edits={edits} /> : <MissingRow key={row.key} row={row} edits={edits} onInvite={onInvite} />))}
       </tbody>
     </Table>
   );
@@ -62,14 +63,18 @@ function SeatedRow({ moveId, party, leg, edits }: { moveId: string; party: Party
   );
 }
 
-function MissingRow({ row, edits }: { row: Extract<PartyRow, { missing: string }>; edits: boolean }) {
+function MissingRow({ row, edits, onInvite }: { row: Extract<PartyRow, { missing: string }>; edits: boolean; onInvite: (slot: string) => void }) {
   const { title, words } = missingWords(row);
   return (
     <tr>
       <Td label="Part"><b>{PART_LABELS[row.missing]}</b><LegLine leg={row.leg} /></Td>
       <Td label="Company" className="text-ink-2">{title}</Td>
       <Td label="People" className="text-ink-2">{words}</Td>
-      {edits && <Td />}
+      {edits && (
+        <Td>
+          <Button variant="ghost" size="small" onClick={() => onInvite(row.key)}>Invite<span className="sr-only"> {PART_LABELS[row.missing].toLowerCase()}{row.leg ? ` of leg ${row.leg.seq}` : ""}</span></Button>
+        </Td>
+      )}
     </tr>
   );
 }

@@ -11,10 +11,12 @@ const within = (path: string, href: string) => path === href || path.startsWith(
 /** The main places, the one that you are in underlined; `tall` is the list in a phone's menu. */
 export function NavLinks({ items, tall = false }: { items: readonly NavItem[]; tall?: boolean }) {
   const path = usePathname();
+  // A place may lie within another; the innermost is where one is.
+  const inner = items.filter(({ href }) => within(path, href)).sort((one, two) => two.href.length - one.href.length)[0];
   return (
     <ul className={tall ? "divide-y divide-bar-ink-2/30" : "flex gap-5"}>
       {items.map(({ href, label }) => {
-        const here = within(path, href);
+        const here = href === inner?.href;
         return (
           <li key={href}>
             <Link

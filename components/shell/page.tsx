@@ -7,7 +7,7 @@ const MAIN_ID = "main";
 /** The first thing that a keyboard reaches: past the bar to the page. */
 export function SkipLink() {
   return (
-    <a href={`#${MAIN_ID}`} className="skip-link fixed top-0 left-0 z-50 -translate-y-full bg-sheet px-4 py-3 font-[620] text-ink underline focus:translate-y-0">
+    <a href={`#${MAIN_ID}`} className="skip-link fixed top-0 left-0 z-50 -translate-y-[120%] bg-sheet px-4 py-3 font-[620] text-ink underline focus:translate-y-0">
       Skip to the page
     </a>
   );

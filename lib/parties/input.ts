@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { emailOf, idOf, line, lineOrNull } from "@/lib/access/input";
-import { INVITED_PARTS } from "./vocabulary";
+import { ADDRESS_WANTED, INVITED_PARTS, WORK_WANTED } from "./vocabulary";
 
 const emptyToNull = <T extends z.ZodType>(kind: T) => z.union([z.null(), z.literal("").transform(() => null), kind]).optional().transform((given) => given ?? null);
 const works = { inspects: z.boolean().default(false), bills: z.boolean().default(false), dispatches: z.boolean().default(false) };
@@ -24,8 +24,8 @@ export const invitePartyInput = z
     if (!onLeg && given.legId) fault("legId", "This part is not tied to a leg.");
     if (!given.companyId && !given.companyName) fault("companyName", "Name the company.");
     if (given.companyId && given.companyName) fault("companyName", "Either a company of the list or a new name, not both.");
-    if (!given.companyId && !given.email) fault("email", "Enter the address that the invitation goes to.");
-    if (given.part === "carrier" && given.email && !given.inspects && !given.bills && !given.dispatches) fault("works", "Choose what this person does for the carrier.");
+    if (!given.companyId && !given.email) fault("email", ADDRESS_WANTED);
+    if (given.part === "carrier" && (given.email || !given.companyId) && !given.inspects && !given.bills && !given.dispatches) fault("works", WORK_WANTED);
   });
 export type InviteParty = z.output<typeof invitePartyInput>;
 

@@ -4,20 +4,25 @@ import type { Party, PartyLeg, PeopleView } from "./types";
 /** A line of the people tab: a seated company, or a part that nobody holds yet. */
 export type PartyRow = { key: string; party: Party } | { key: string; missing: "contractor" | "carrier" | "receiver" | "payer"; leg: PartyLeg | null };
 
-const order = (party: Party, legs: readonly PartyLeg[]) => SEAT_PARTS.indexOf(party.part) * 1000 + (legs.find((leg) => leg.legId === party.legId)?.seq ?? 0);
+type MissingPart = Extract<PartyRow, { missing: string }>["missing"];
 
-/** Seated companies in the order of parts and legs, each missing part where it would stand. Who pays for a leg is missing only when nobody is named or the named one is not seated. */
+/** Companies in the order of parts and legs, each missing part where it would stand. Who pays for a leg is missing only when nobody is named, or the named one is neither seated nor the owner. */
 export function partyRows({ parties, legs }: Pick<PeopleView, "parties" | "legs">): PartyRow[] {
-  const seated = [...parties].sort((one, two) => order(one, legs) - order(two, legs)).map((party): PartyRow => ({ key: party.seatId, party }));
   const has = (part: Party["part"], legId: string | null = null) => parties.some((one) => one.part === part && one.legId === legId);
   const ownerId = parties.find((one) => one.part === "owner")?.companyId;
-  const missing: PartyRow[] = [
-    ...(has("contractor") ? [] : [{ key: "contractor", missing: "contractor" as const, leg: null }]),
-    ...legs.filter((leg) => !has("carrier", leg.legId)).map((leg) => ({ key: `carrier ${leg.legId}`, missing: "carrier" as const, leg })),
-    ...(has("receiver") ? [] : [{ key: "receiver", missing: "receiver" as const, leg: null }]),
-    ...legs.filter((leg) => !has("payer", leg.legId) && (leg.payerCompanyId === null || leg.payerCompanyId !== ownerId)).map((leg) => ({ key: `payer ${leg.legId}`, missing: "payer" as const, leg })),
+  const gap = (missing: MissingPart, leg: PartyLeg | null = null): PartyRow => ({ key: `${missing} ${leg?.legId ?? ""}`.trim(), missing, leg });
+  const rows: PartyRow[] = [
+    ...parties.map((party): PartyRow => ({ key: party.seatId, party })),
+    ...(has("contractor") ? [] : [gap("contractor")]),
+    ...legs.filter((leg) => !has("carrier", leg.legId)).map((leg) => gap("carrier", leg)),
+    ...(has("receiver") ? [] : [gap("receiver")]),
+    ...legs.filter((leg) => !has("payer", leg.legId) && (leg.payerCompanyId === null || leg.payerCompanyId !== ownerId)).map((leg) => gap("payer", leg)),
   ];
-  return [...seated, ...missing];
+  const place = (row: PartyRow) => {
+    const [part, legId] = "party" in row ? [row.party.part, row.party.legId] : [row.missing, row.leg?.legId ?? null];
+    return SEAT_PARTS.indexOf(part) * 1000 + (legs.find((leg) => leg.legId === legId)?.seq ?? 0);
+  };
+  return rows.sort((one, two) => place(one) - place(two));
 }
 
 /** What a missing part says: how things go on without it, and who it would be. */

@@ -11,3 +11,6 @@ export const FOLLOW_DAYS = 90;
 
 /** Said of every letter that opens nothing any more, whatever the reason, so that a found one tells nothing. */
 export const INVITATION_OVER = "This invitation can’t be used any more.";
+
+export const ADDRESS_WANTED = "Enter the address that the invitation goes to.";
+export const WORK_WANTED = "Choose what this person does for the carrier.";

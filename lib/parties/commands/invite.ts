@@ -11,11 +11,18 @@ import type { Attempt, Viewer } from "@/lib/viewer/types";
 import type { InviteParty, OneInvitation } from "../input";
 import { listKnownCompanies } from "../queries";
 import { denySeating, invitationState } from "../rules";
+import { ADDRESS_WANTED, WORK_WANTED } from "../vocabulary";
 import { postLetter } from "./letter";
 
 type Chosen = { companyId: string; name: string; own: boolean };
 
 const fieldFault = (field: string, message: string) => new AppError("bad_input", "Some entries need another look.", { fields: { [field]: [message] } });
+
+/** Only a company of one's own needs no letter; then everything that the letter lacks is named at once. */
+function noAddress({ part, inspects, bills, dispatches }: InviteParty): AppError {
+  const idle = part === "carrier" && !inspects && !bills && !dispatches;
+  return new AppError("bad_input", "Some entries need another look.", { fields: { email: [ADDRESS_WANTED], ...(idle && { works: [WORK_WANTED] }) } });
+}
 
 /** Gives a company a part of the move and mails one of its people a letter; a company of the inviter's own is seated without one. */
 export async function inviteParty(viewer: Viewer, input: InviteParty, attempt: Attempt) {
@@ -31,7 +38,7 @@ export async function inviteParty(viewer: Viewer, input: InviteParty, attempt: A
     const seatId = await takeSeat(ctx, input, company);
     const told = { company: company.name, part: input.part, legSeq: leg?.seq ?? null, name: input.name };
     if (!input.email) {
-      if (!company.own) throw fieldFault("email", "Enter the address that the invitation goes to.");
+      if (!company.own) throw noAddress(input);
       await ctx.append({ kind: "party.joined", legId: input.legId, detail: told });
       return { seatId, invitationId: null };
     }

@@ -34,7 +34,7 @@ describe("inviting", () => {
 
   it("names every field that is missing", () => {
     const parsed = invitePartyInput.safeParse({ moveId: move.moveId, part: "carrier", legId: "", companyId: "", companyName: "", email: "", name: "" });
-    expect(parsed.error?.issues.map((issue) => issue.path.join("."))).toEqual(["legId", "companyName", "email"]);
+    expect(parsed.error?.issues.map((issue) => issue.path.join("."))).toEqual(["legId", "companyName", "email", "works"]);
     const worked = invitePartyInput.safeParse({ moveId: move.moveId, part: "carrier", legId: move.legIds[0], companyName: "X", email: "a@example.org" });
     expect(worked.error?.issues.map((issue) => issue.path.join("."))).toEqual(["works"]);
   });
