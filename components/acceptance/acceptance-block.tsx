@@ -68,6 +68,7 @@ function NotYet({ moveId, leg }: { moveId: string; leg: AcceptanceLeg }) {
   const stopping = leg.findings.filter(({ severity, state }) => severity === "stops-move" && (state === "open" || state === "answered"));
   return (
     <div className="grid gap-3 text-14">
+      {leg.lapsed?.validUntil && <Notice kind="stop" title="It ran out">The acceptance signed by {leg.lapsed.name} was valid until {formatDay(leg.lapsed.validUntil)}. It is signed again before the carrier takes the unit.</Notice>}
       {leg.missing.length > 0 ? (
         <>
           <p>Not signed. Before it can be:</p>

@@ -18,7 +18,7 @@ import { denyAnother, denyTerms, denyWithdrawal, restrictionLabels } from "./rul
 import { acceptanceStatement } from "./statement";
 
 async function requireLegFacts(ctx: MoveWrite, legId: string) {
-  const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
+  const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id, ctx.at);
   const leg = facts.legs.find((one) => one.legId === legId);
   if (!leg) throw new AppError("not_found", "No such leg on this move.");
   return { facts, leg };
@@ -34,6 +34,8 @@ export async function signAcceptance(viewer: Viewer, input: SignAcceptance, atte
     refuse(denyTerms(input, dayAt(ctx.at.toISOString(), leg.fromZone)));
     const covered = await unsafeCovered(ctx.tx, ctx.move.id, leg.id);
     if (unsafeCoveredHash(covered) !== input.rowsHash) throw new AppError("stale", "Findings or prep have changed since you opened this page. Look them over once more before you sign.");
+    const lapsed = await findStandingAcceptance(ctx, leg.id);
+    if (lapsed) await liftAcceptance(ctx, lapsed, leg.carrierName, "Ran out; signed again", enteredFor);
     const { restrictions, restrictionNote, number, validUntil } = input;
     const acceptanceId = newId("acceptance");
     const unit = `${covered.unit.mark} ${covered.unit.number}`.trim();

@@ -22,7 +22,7 @@ import type { Acceptances, AcceptanceView } from "./types";
 export async function listAcceptances(viewer: Viewer, moveId: string, now = new Date()): Promise<Acceptances> {
   const { move, parts } = await requireMove(viewer, moveId);
   if (!maySee(parts, "findings")) throw new AppError("not_your_part", "Acceptances are not part of what you see on this move.");
-  const facts = await unsafeGatherFacts(db(), moveId);
+  const facts = await unsafeGatherFacts(db(), moveId, now);
   const unit = await unsafeUnit(db(), moveId);
   const route = await unsafeInspectedLegs(db(), moveId);
   const rows = await acceptanceRows(moveId);
@@ -32,11 +32,12 @@ export async function listAcceptances(viewer: Viewer, moveId: string, now = new 
       const leg = route.find((one) => one.legId === fact.legId);
       const covered = await unsafeCovered(db(), moveId, fact.legId);
       const own = rows.filter((row) => row.legId === fact.legId).map((row) => viewOf(row, covered, dayAt(now.toISOString(), leg?.zone ?? move.originZone)));
-      const standing = own.find((one) => !one.withdrawnAt) ?? null;
+      const last = own.find((one) => !one.withdrawnAt) ?? null;
+      const [standing, lapsed] = fact.acceptanceLapsedOn ? [null, last] : [last, null];
       const may = leg && move.state === "open" ? mayOnLeg(parts, "acceptance.sign", leg) : null;
       return {
         legId: fact.legId, seq: fact.seq, carrierName: fact.carrierName, fromPlace: fact.fromPlace, toPlace: fact.toPlace, zone: leg?.zone ?? move.originZone, onBoard: leg?.onBoard ?? false, takenOver: fact.takenOver,
-        standing, withdrawn: own.filter((one) => one.withdrawnAt), missing: standing ? [] : (denyAcceptance(facts, fact)?.missing ?? []),
+        standing, lapsed, withdrawn: own.filter((one) => one.withdrawnAt), missing: standing ? [] : (denyAcceptance(facts, fact)?.missing ?? []),
         findings: covered.findings.map(({ id, label, component, severity, state }) => ({ id, label, component, severity, state })),
         maySign: denyAnother(fact) ? null : may, mayWithdraw: standing && !fact.takenOver ? may : null, rowsHash: unsafeCoveredHash(covered),
       };

@@ -36,6 +36,8 @@ export type AcceptanceLeg = {
   onBoard: boolean;
   takenOver: boolean;
   standing: AcceptanceView | null;
+  /** Its last day has passed before the carrier took the unit over; it is signed again. */
+  lapsed: AcceptanceView | null;
   /** Withdrawn ones, the latest first. */
   withdrawn: AcceptanceView[];
   /** What keeps it from being signed; empty when it can be, or stands. */

@@ -3,6 +3,7 @@ import { readEnv } from "@/lib/env";
 import { unsafeSweepPhotos } from "@/lib/evidence/commands/arrivals";
 import { unsafeCheckPhoto } from "@/lib/evidence/commands/check";
 import { unsafeCheckOpenPayments, unsafeCheckPayment } from "@/lib/fees/commands/checks";
+import { unsafeRefreshLapsed } from "@/lib/standing/commands";
 import { runWorker, type WorkerParts } from "@/lib/worker/run";
 import { readEnvFile } from "./environment";
 
@@ -14,6 +15,7 @@ const PARTS: WorkerParts = {
   },
   rounds: [
     { name: "photos without a callback", everySeconds: 60, run: unsafeSweepPhotos },
+    { name: "acceptances that ran out", everySeconds: 900, run: unsafeRefreshLapsed },
     { name: "open payments", everySeconds: 120, run: async (now) => void (await unsafeCheckOpenPayments(now)) },
   ],
 };

@@ -52,7 +52,7 @@ export async function finishItem(viewer: Viewer, input: FinishItem, attempt: Att
   return writeOnMove(viewer, attempt, input.moveId, async (ctx) => {
     ctx.allow({ action: "prep.do" });
     const item = await requireItem(ctx, input.itemId, input.version);
-    refuse(denyWork(await unsafeGatherFacts(ctx.tx, ctx.move.id), item));
+    refuse(denyWork(await unsafeGatherFacts(ctx.tx, ctx.move.id, ctx.at), item));
     refuse(denyFinish(item, input));
     await linkPhotos(ctx, input.photoIds, "prep", item.id);
     const { value, tagNumber, note } = input;
@@ -67,7 +67,7 @@ export async function skipItem(viewer: Viewer, input: SkipItem, attempt: Attempt
   return writeOnMove(viewer, attempt, input.moveId, async (ctx) => {
     ctx.allow({ action: "prep.do" });
     const item = await requireItem(ctx, input.itemId, input.version);
-    refuse(denyWork(await unsafeGatherFacts(ctx.tx, ctx.move.id), item));
+    refuse(denyWork(await unsafeGatherFacts(ctx.tx, ctx.move.id, ctx.at), item));
     if (item.state !== "to-do") throw new AppError("stale", "Somebody has already worked on this item. Look again.");
     const skipped = await change(ctx, item, { state: "not-applicable", skippedWhy: input.why, byUserId: viewer.userId, byName: viewer.name, at: ctx.at, restoreState: "none" });
     await ctx.append({ kind: "prep.skipped", detail: detailOf(item, { why: input.why }) });
@@ -80,7 +80,7 @@ export async function reopenItem(viewer: Viewer, input: ReopenItem, attempt: Att
   return writeOnMove(viewer, attempt, input.moveId, async (ctx) => {
     ctx.allow({ action: "prep.do" });
     const item = await requireItem(ctx, input.itemId, input.version);
-    refuse(denyWork(await unsafeGatherFacts(ctx.tx, ctx.move.id), item));
+    refuse(denyWork(await unsafeGatherFacts(ctx.tx, ctx.move.id, ctx.at), item));
     if (item.state === "to-do") throw new AppError("stale", "This item is open already.");
     const reopened = await change(ctx, item, { state: "to-do", skippedWhy: null, byUserId: null, byName: null, at: null, restoreState: "none" });
     await ctx.append({ kind: "prep.reopened", detail: detailOf(item, { why: input.why }) });
@@ -97,7 +97,7 @@ export async function reopenItem(viewer: Viewer, input: ReopenItem, attempt: Att
 export async function signPhase(viewer: Viewer, input: SignPhase, attempt: Attempt) {
   return writeOnMove(viewer, attempt, input.moveId, async (ctx) => {
     const held = ctx.allow({ action: "prep.sign" });
-    const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id);
+    const facts = await unsafeGatherFacts(ctx.tx, ctx.move.id, ctx.at);
     const phase = input.phase === "where-it-stands" ? facts.standing : facts.coupled;
     refuse(denySign(phase));
     const rows = unsafeSignedRows(await unsafePhaseRows(ctx.tx, ctx.move.id, input.phase));

@@ -1,7 +1,7 @@
 import "server-only";
 import { and, eq, isNull, sql } from "drizzle-orm";
 import { db, type Tx } from "@/db/client";
-import { attempts, companies, companyMembers, legs, moves, moveSeats, seatPeople, users, waits } from "@/db/schema";
+import { acceptances, attempts, companies, companyMembers, legs, moves, moveSeats, seatPeople, users, waits } from "@/db/schema";
 import { denyAction, partFor, type Action, type Doing } from "@/lib/access/policy";
 import { lockMove, type SeenMove } from "@/lib/access/scope";
 import type { EnteredFor, HeldPart } from "@/lib/access/types";
@@ -133,7 +133,7 @@ export async function peopleIn(tx: Pick<Tx, "select">, moveId: string, { part, l
 
 /** Works out whose turn it is and writes it to the move; an interval of waiting ends when the answer changes. Takes the transaction that changed something. */
 export async function refreshStanding(tx: Tx, moveId: string, at: Date): Promise<void> {
-  const { stage, waiting, progressMil } = standingOf(await unsafeGatherFacts(tx, moveId));
+  const { stage, waiting, progressMil } = standingOf(await unsafeGatherFacts(tx, moveId, at));
   const [before] = await tx.select({ part: moves.waitingPart, legId: moves.waitingLegId, companyId: moves.waitingCompanyId, what: moves.waitingFor, since: moves.waitingSince }).from(moves).where(eq(moves.id, moveId));
   const same = before && (before.part ?? null) === (waiting?.part ?? null) && (before.legId ?? null) === (waiting?.legId ?? null)
     && (before.what ?? null) === (waiting?.waitingFor ?? null) && (before.companyId ?? null) === (waiting?.companyId ?? null);
@@ -145,6 +145,19 @@ export async function refreshStanding(tx: Tx, moveId: string, at: Date): Promise
   if (same) return;
   await tx.update(waits).set({ until: at }).where(and(eq(waits.moveId, moveId), isNull(waits.until)));
   if (waiting) await tx.insert(waits).values({ id: newId("wait"), moveId, part: waiting.part, legId: waiting.legId, name: waiting.name, waitingFor: waiting.waitingFor, since: at });
+}
+
+/** No viewer: a day that has passed changes whose turn it is without anybody writing. Looks at open moves with an acceptance whose last day lies behind. */
+export async function unsafeRefreshLapsed(now: Date): Promise<void> {
+  const yesterday = new Date(now.getTime() - 86_400_000).toISOString().slice(0, 10);
+  const rows = await db().selectDistinct({ moveId: acceptances.moveId }).from(acceptances).innerJoin(moves, eq(moves.id, acceptances.moveId))
+    .where(and(eq(moves.state, "open"), isNull(acceptances.withdrawnAt), sql`${acceptances.validUntil} <= ${yesterday}`));
+  for (const { moveId } of rows) {
+    await db().transaction(async (tx) => {
+      await tx.select({ id: moves.id }).from(moves).where(eq(moves.id, moveId)).for("update");
+      await refreshStanding(tx, moveId, now);
+    });
+  }
 }
 
 /** The carrier of a leg as a step needs it: refuses when the leg is not on this move. */

@@ -26,6 +26,7 @@ export function conditionsOf(move: MoveFacts, leg: LegFacts): Condition[] {
 
 function acceptanceDetail(leg: LegFacts): string {
   if (leg.accepted) return leg.acceptanceNumber ? `No. ${leg.acceptanceNumber}` : "Signed by the inspector";
+  if (leg.acceptanceLapsedOn) return `Ran out on ${leg.acceptanceLapsedOn}; the inspector signs again`;
   if (leg.openFindings + leg.answeredFindings > 0) return [leg.answeredFindings ? `${many(leg.answeredFindings, "finding")} answered` : "", leg.openFindings ? `${leg.openFindings} open` : ""].filter(Boolean).join(", ");
   return leg.visits > 0 ? "Inspected, not signed" : "Not inspected yet";
 }

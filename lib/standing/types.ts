@@ -25,6 +25,8 @@ export type LegFacts = {
   unansweredBeforePickup: number;
   accepted: boolean;
   acceptanceNumber: string | null;
+  /** The last day of an acceptance that has run out before the carrier took the unit over. */
+  acceptanceLapsedOn: string | null;
   quote: "none" | "given" | "agreed" | "paid";
   paymentOpen: boolean;
   billingCleared: boolean;

@@ -1,10 +1,11 @@
 import { and, eq } from "drizzle-orm";
 import { expect, it } from "vitest";
 import { db } from "@/db/client";
-import { moveSeats, outbox, record, signatures } from "@/db/schema";
+import { moves, moveSeats, outbox, record, signatures } from "@/db/schema";
 import { signAcceptance, withdrawAcceptance } from "@/lib/acceptance/commands";
 import { listAcceptances } from "@/lib/acceptance/queries";
 import { answerFinding, clearFinding, postFinding } from "@/lib/findings/commands";
+import { unsafeRefreshLapsed } from "@/lib/standing/commands";
 import { getFacts } from "@/lib/standing/queries";
 import { withDatabase } from "../../support/database";
 import { anAttempt, seedMove, type SeededMove } from "../../support/factories";
@@ -138,4 +139,20 @@ it("twenty signatures at once leave one acceptance", async () => {
   expect(tries.filter(({ status }) => status === "fulfilled")).toHaveLength(1);
   const leg = await legOf(move);
   expect([leg?.standing !== null, leg?.withdrawn.length]).toEqual([true, 0]);
+});
+
+it("ran out before the carrier came, it stands no more and is signed again; once the unit is taken over its day does not matter", async () => {
+  const seeded = await seedMove({ prepDone: true });
+  const { moveId, legIds, inspectorA, owner } = seeded;
+  await seedPrepSignature(seeded);
+  const first = anAttempt({ at: new Date(Date.now() - 10 * 86_400_000) });
+  const tomorrowThen = new Date(first.at.getTime() + 2 * 86_400_000).toISOString().slice(0, 10);
+  await signAcceptance(inspectorA, await anAcceptance(inspectorA, moveId, legIds[0], { validUntil: tomorrowThen }), first);
+  expect((await getFacts(owner, moveId)).legs[0]).toMatchObject({ accepted: false, acceptanceLapsedOn: tomorrowThen });
+  await unsafeRefreshLapsed(new Date());
+  expect((await db().select({ what: moves.waitingFor }).from(moves).where(eq(moves.id, moveId)))[0]?.what).toBe("inspect");
+  await signAcceptance(inspectorA, await anAcceptance(inspectorA, moveId, legIds[0]), anAttempt());
+  expect((await getFacts(owner, moveId)).legs[0]).toMatchObject({ accepted: true, acceptanceLapsedOn: null });
+  const [leg] = (await listAcceptances(owner, moveId)).legs;
+  expect(leg?.withdrawn.map((one) => one.withdrawnWhy)).toEqual(["Ran out; signed again"]);
 });

@@ -6,7 +6,7 @@ import { WAITS } from "@/lib/standing/vocabulary";
 const aLeg = (given: Partial<LegFacts> = {}): LegFacts => ({
   legId: `leg${given.seq ?? 1}`, seq: 1, carrierName: `Carrier ${given.seq ?? 1}`, carrierMark: null, carrierCompanyId: "com", fromPlace: "Sand Hollow", toPlace: "Ardell", miles: null,
   payerName: "Fenn Valley Fund", payerCompanyId: "com-payer", visits: 0, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0,
-  accepted: false, acceptanceNumber: null, quote: "none", paymentOpen: false, billingCleared: false, instructed: false, released: false, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
+  accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", paymentOpen: false, billingCleared: false, instructed: false, released: false, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
 });
 const SIGNED = { total: 34, left: 0, signed: true };
 const aMove = (given: Partial<MoveFacts> = {}): MoveFacts => ({
@@ -58,6 +58,12 @@ it("acceptance is about the unit: money has no say, prep and stopping findings h
   const denied = denyAcceptance(aMove({ standing: { total: 34, left: 3, signed: false } }), aLeg({ stoppingOpen: 2 }));
   expect(denied?.missing).toHaveLength(2);
   expect(denyAcceptance(aMove(), aLeg({ answeredFindings: 1, stoppingOpen: 1 }))?.missing).toHaveLength(1);
+});
+
+it("an acceptance that ran out is no condition met; the inspector signs again", () => {
+  const move = aMove({ legs: [aLeg({ visits: 1, acceptanceLapsedOn: "2026-11-20" })] });
+  expect(wait(move)).toMatchObject({ waitingFor: "accept", part: "inspector" });
+  expect(denyInstruction(move, aLeg({ acceptanceLapsedOn: "2026-11-20", billingCleared: true }))?.missing).toEqual(["Acceptance: ran out on 2026-11-20; the inspector signs again"]);
 });
 
 it("the instruction needs acceptance and billing, the release the instruction as well", () => {
