@@ -26,5 +26,7 @@ export function answerText(key: string, value: string): string {
   const requirement = BY_KEY.get(key);
   const choice = requirement?.choices?.find((one) => one.value === value);
   if (choice) return choice.label;
-  return requirement?.unit ? `${value} ${requirement.unit}` : value;
+  // A year has four digits and takes no comma.
+  const figure = requirement?.kind === "number" && /^\d{5,}$/.test(value) ? Number(value).toLocaleString("en-US") : value;
+  return requirement?.unit ? `${figure} ${requirement.unit}` : figure;
 }

@@ -48,7 +48,7 @@ describe("changing the unit", () => {
     const base = { ...kept.answers, bearings: "roller-rotating-cap" };
     await editEquipment(contractor, { moveId, version: 1, answers: { ...base, weight: "360000" }, aliases: [] }, anAttempt());
     await expect(editEquipment(owner, { moveId, version: 1, answers: { ...base, weight: "1" }, aliases: [] }, anAttempt())).rejects.toMatchObject({
-      code: "stale", message: expect.stringContaining("T. Ibarra changed this"), missing: expect.arrayContaining(["T. Ibarra: How much does it weigh as it will travel? 360000 lb, was 362400 lb"]),
+      code: "stale", message: expect.stringContaining("T. Ibarra changed this"), missing: expect.arrayContaining(["T. Ibarra: How much does it weigh as it will travel? 360,000 lb, was 362,400 lb"]),
     });
     expect((await getEquipment(owner, moveId)).answers.weight).toBe("360000");
   });

@@ -23,7 +23,7 @@ describe("what was changed", () => {
   it("is told in words", () => {
     expect(unitChanges({ answers: { weight: "360000" }, aliases: [] }, { answers: { weight: "362400", "hand-brake": "yes" }, aliases: ["VRHL 2783"] })).toEqual([
       { key: "hand-brake", label: "Does the hand brake hold, and does it release fully?", before: null, after: "Holds and releases fully" },
-      { key: "weight", label: "How much does it weigh as it will travel?", before: "360000 lb", after: "362400 lb" },
+      { key: "weight", label: "How much does it weigh as it will travel?", before: "360,000 lb", after: "362,400 lb" },
       { key: "aliases", label: "Other marks and numbers", before: null, after: "VRHL 2783" },
     ]);
   });
