@@ -47,7 +47,7 @@ export default defineConfig([
   },
   {
     name: "towfolio/default-exports",
-    files: ["app/**", "*.config.{ts,mjs}", "proxy.ts"],
+    files: ["app/**", "**/*.config.{ts,mjs}", "proxy.ts"],
     rules: { "import/no-default-export": "off" },
   },
 ]);

@@ -1,5 +1,5 @@
 import "server-only";
-import { z } from "zod";
+import type { z } from "zod";
 import { env } from "@/lib/env";
 import { AppError, type FieldErrors } from "@/lib/errors";
 import { sha256Hex } from "@/lib/ids";

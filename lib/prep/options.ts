@@ -24,4 +24,4 @@ const mutation = <V extends { key: string; body: unknown }>(moveId: string, path
 
 export const prepItemMutation = (moveId: string) => mutation(moveId, ({ itemId, act }: Sent<Record<string, unknown>> & { itemId: string; act: Act }) => routes.api.prepItem(moveId, itemId, act));
 export const restoreItemMutation = (moveId: string) => mutation(moveId, ({ itemId, act }: Sent<Record<string, unknown>> & { itemId: string; act: RestoreAct }) => routes.api.restoreItem(moveId, itemId, act));
-export const signPhaseMutation = (moveId: string) => mutation(moveId, (_sent: Sent<{ phase: PrepPhase; name: string; rowsHash: string }>) => routes.api.prepSign(moveId));
+export const signPhaseMutation = (moveId: string) => mutation<Sent<{ phase: PrepPhase; name: string; rowsHash: string }>>(moveId, () => routes.api.prepSign(moveId));

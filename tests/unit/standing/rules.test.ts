@@ -1,7 +1,7 @@
 import { expect, it } from "vitest";
 import { conditionsOf, denyAcceptance, denyClosing, denyInstruction, denyRelease, denyTakeOver, handoverMil, standingOf } from "@/lib/standing/rules";
 import type { LegFacts, MoveFacts } from "@/lib/standing/types";
-import { WAITS } from "@/lib/standing/vocabulary";
+import type { WAITS } from "@/lib/standing/vocabulary";
 
 const aLeg = (given: Partial<LegFacts> = {}): LegFacts => ({
   legId: `leg${given.seq ?? 1}`, seq: 1, carrierName: `Carrier ${given.seq ?? 1}`, carrierMark: null, carrierCompanyId: "com", fromPlace: "Sand Hollow", toPlace: "Ardell", miles: null,
