@@ -1,7 +1,8 @@
 "use client";
 
 import { useQuery } from "@tanstack/react-query";
-import { useState } from "react";
+import { useState, type ReactNode } from "react";
+import { Disclosure } from "@/components/ui/disclosure";
 import { Empty } from "@/components/ui/empty";
 import { Notice } from "@/components/ui/notice";
 import { Sheet } from "@/components/ui/sheet";
@@ -52,20 +53,33 @@ function Phase({ moveId, prep, phase }: { moveId: string; prep: PrepList; phase:
       )}
       {waits && <Notice kind="info" className="mb-4">{waits}</Notice>}
       {byGroup(prep.items, phase.phase).map(({ group, items, left }) => (
-        <section key={group} aria-label={GROUP_LABELS[group]} className="mb-5">
-          <div className="mb-2 flex items-baseline justify-between gap-4">
-            <h3 className="text-17 font-[640]">{GROUP_LABELS[group]}</h3>
-            <Mono className="text-14 text-ink-2">{items.length - left} of {items.length}</Mono>
-          </div>
-          <ol className="border border-rule-strong">
-            {items.map((item) => (
-              <PrepRow key={item.id} moveId={moveId} item={item} zone={prep.originZone} may={prep.may.work && !waits} open={openId === item.id} onOpen={(open) => setOpenId(open ? item.id : null)} />
-            ))}
-          </ol>
-        </section>
+        <Group key={group} name={GROUP_LABELS[group]} done={items.length - left} total={items.length}>
+          {items.map((item) => (
+            <PrepRow key={item.id} moveId={moveId} item={item} zone={prep.originZone} may={prep.may.work && !waits} open={openId === item.id} onOpen={(open) => setOpenId(open ? item.id : null)} />
+          ))}
+        </Group>
       ))}
       {prep.may.work && !waits && <SignPhase moveId={moveId} phase={phase} />}
     </Sheet>
+  );
+}
+
+/** One group of the list; a finished one starts folded up, so that a phone shows what is left. */
+function Group({ name, done, total, children }: { name: string; done: number; total: number; children: ReactNode }) {
+  const [startsOpen] = useState(done < total);
+  return (
+    <Disclosure
+      open={startsOpen}
+      className="-mt-px"
+      summary={
+        <span className="flex w-full items-baseline justify-between gap-4">
+          <h3 className="text-17 font-[640]">{name}</h3>
+          <Mono className="text-14 text-ink-2">{done} of {total}</Mono>
+        </span>
+      }
+    >
+      <ol className="-ml-5 border border-rule-strong">{children}</ol>
+    </Disclosure>
   );
 }
 
