@@ -24,8 +24,8 @@ const TEMPLATES: { [K in MailKind]: Template<MailPayloads[K]> } = {
   "quote-given": news, movement: news, arrival: news, "move-closed": news,
 };
 
-/** One line, without the characters that would start another header; cut between characters, not within one. */
-const oneLine = (subject: string) => Array.from(subject.replace(/[\s\p{Cc}]+/gu, " ").trim()).slice(0, 180).join("");
+/** One line, without what would start another header or, as an encoded word (RFC 2047), read as other text; cut between characters, not within one. */
+const oneLine = (subject: string) => Array.from(subject.replace(/[\s\p{Cc}]+/gu, " ").replaceAll("=?", "= ?").trim()).slice(0, 180).join("");
 
 /** Subject, HTML and plain text of a message. */
 export async function renderMail<K extends MailKind>(kind: K, payload: MailPayloads[K]): Promise<{ subject: string; html: string; text: string }> {

@@ -16,10 +16,13 @@ const ONCE = { headers: { connection: "close" } };
 export async function openSink(smtpPort = 0) {
   const folder = mkdtempSync(join(tmpdir(), "towfolio-mail-"));
   const sink = await startMailSink({ smtpPort, pagePort: 0, folder });
+  const messages = async (to = ""): Promise<Message[]> => ((await (await fetch(`${sink.url}/messages?to=${encodeURIComponent(to)}`, ONCE)).json()) as Message[]).toReversed();
   return {
     smtpUrl: sink.smtpUrl,
     /** Everything that arrived, oldest first. */
-    messages: async (to = ""): Promise<Message[]> => ((await (await fetch(`${sink.url}/messages?to=${encodeURIComponent(to)}`, ONCE)).json()) as Message[]).toReversed(),
+    messages,
+    /** The newest message as it came over the wire. */
+    source: async () => (await fetch(`${sink.url}/messages/${(await messages()).at(-1)?.id}/raw`, ONCE)).text(),
     fault: async (fault: { kind: string; times?: number; ms?: number; to?: string }) =>
       void (await fetch(`${sink.url}/faults`, { method: "POST", body: JSON.stringify(fault), headers: { "content-type": "application/json" } })),
     clear: async () => void (await fetch(`${sink.url}/messages`, { method: "DELETE", ...ONCE })),
