@@ -1,6 +1,7 @@
 import "next/dist/server/node-environment-baseline";
 import { workAsyncStorage, type WorkStore } from "next/dist/server/app-render/work-async-storage.external";
 import { workUnitAsyncStorage, type WorkUnitStore } from "next/dist/server/app-render/work-unit-async-storage.external";
+import { ResponseCookies } from "next/dist/server/web/spec-extension/cookies";
 import { auth } from "@/lib/auth";
 
 type Door = (request: Request, context: { params: Promise<Record<string, string>> }) => Promise<Response>;
@@ -8,7 +9,8 @@ type Door = (request: Request, context: { params: Promise<Record<string, string>
 /** Calls a door with a request, and lets `headers()` see that request's headers, as the web server does. */
 export function ask(door: Door, request: Request, params: Record<string, string> = {}): Promise<Response> {
   const work = { route: "/test" } as WorkStore;
-  const unit = { type: "request", phase: "action", headers: request.headers } as unknown as WorkUnitStore;
+  const cookies = new ResponseCookies(new Headers());
+  const unit = { type: "request", phase: "action", headers: request.headers, cookies, mutableCookies: cookies, userspaceMutableCookies: cookies } as unknown as WorkUnitStore;
   return workAsyncStorage.run(work, () => workUnitAsyncStorage.run(unit, () => door(request, { params: Promise.resolve(params) })));
 }
 
