@@ -17,6 +17,7 @@ import { recordArrivalMutation } from "@/lib/movement/options";
 import { arrivalStatement } from "@/lib/movement/rules";
 import type { Movement } from "@/lib/movement/types";
 import { routes } from "@/lib/routes";
+import { focusOpened } from "./open-form";
 
 /** The receiver's look at the unit: what it is like, what is missing, the same views as at departure, and a name under it. */
 export function ArrivalForm({ moveId, movement, onDone }: { moveId: string; movement: Movement; onDone: () => void }) {
@@ -33,7 +34,7 @@ export function ArrivalForm({ moveId, movement, onDone }: { moveId: string; move
     record.mutate({ key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
   };
   return (
-    <form noValidate onSubmit={submit} className="grid max-w-[680px] gap-3.5 border-t-2 border-ink pt-4">
+    <form ref={focusOpened} tabIndex={-1} noValidate onSubmit={submit} className="outline-none grid grid-cols-[minmax(0,1fr)] max-w-[680px] gap-3.5 border-t-2 border-ink pt-4">
       <FormErrors errors={faults.list} title="The arrival was not recorded." />
       <Notice title="Before you go near it">
         Hand brake applied and proven to hold, wheels chocked, protected from other movements as your local rules say. Air may still be stored in reservoirs and brake cylinders.

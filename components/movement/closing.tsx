@@ -13,7 +13,7 @@ import { closeMoveMutation } from "@/lib/movement/options";
 import { closingStatement } from "@/lib/movement/rules";
 import type { Movement } from "@/lib/movement/types";
 import { routes } from "@/lib/routes";
-import type { FormSwitch } from "./open-form";
+import { focusOpened, type FormSwitch } from "./open-form";
 
 function CloseForm({ moveId, unit, onDone }: { moveId: string; unit: string; onDone: () => void }) {
   const [name, setName] = useState("");
@@ -25,7 +25,7 @@ function CloseForm({ moveId, unit, onDone }: { moveId: string; unit: string; onD
     close.mutate({ key: intent.key({ name }), body: { name } }, { onSuccess: () => { intent.done(); onDone(); } });
   };
   return (
-    <form noValidate onSubmit={submit} className="grid max-w-[60ch] gap-3 border-t-2 border-ink pt-4">
+    <form ref={focusOpened} tabIndex={-1} noValidate onSubmit={submit} className="outline-none grid grid-cols-[minmax(0,1fr)] max-w-[60ch] gap-3 border-t-2 border-ink pt-4">
       <FormErrors errors={faults.list} title="The move was not closed." />
       <p className="text-15">{closingStatement(unit)}</p>
       <p className="text-14 text-ink-2">Nothing on the case changes any more afterwards. Everybody who was part of it can still read it.</p>

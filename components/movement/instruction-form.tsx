@@ -12,6 +12,7 @@ import { TextArea, TextField } from "@/components/ui/text-field";
 import { faultsOf } from "@/lib/entry/fetcher";
 import { giveInstructionMutation } from "@/lib/movement/options";
 import type { MovementLeg } from "@/lib/movement/types";
+import { focusOpened } from "./open-form";
 
 /** The desk's form; for a carrier that is not on board, with how its word came in. */
 export function InstructionForm({ moveId, leg, onDone }: { moveId: string; leg: MovementLeg; onDone: () => void }) {
@@ -28,7 +29,7 @@ export function InstructionForm({ moveId, leg, onDone }: { moveId: string; leg: 
     give.mutate({ key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
   };
   return (
-    <form noValidate onSubmit={submit} className="mt-3 grid gap-3 border-t-2 border-ink pt-4">
+    <form ref={focusOpened} tabIndex={-1} noValidate onSubmit={submit} className="outline-none mt-3 grid grid-cols-[minmax(0,1fr)] gap-3 border-t-2 border-ink pt-4">
       <FormErrors errors={faults.list} title="The instruction was not given." />
       <div className="grid gap-3 sm:grid-cols-2">
         <TextField {...type("billNumber")} label="Bill-of-lading number" required mono autoComplete="off" />

@@ -60,7 +60,7 @@ export function Instruction({ moveId, leg, switcher }: { moveId: string; leg: Mo
             </Button>
           )}
           {instruction && (
-            <Button variant="plain" size="small" onClick={() => show({ form: "withdraw", id: instruction.id })}>
+            <Button variant="plain" size="small" onClick={() => show({ form: "withdraw", legId: leg.legId, id: instruction.id })}>
               Withdraw it
             </Button>
           )}

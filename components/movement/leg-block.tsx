@@ -63,7 +63,7 @@ export function LegBlock({ moveId, movement, leg, current, switcher }: Props) {
   const next = movement.legs.find((one) => one.seq === leg.seq + 1) ?? null;
   const notes = movement.closing.closedAt ? [] : legNotes(leg, next, movement.sightings, movement.at);
   return (
-    <section id={`leg-${leg.legId}`} aria-labelledby={`leg-title-${leg.legId}`} className="border border-rule-strong">
+    <section id={`leg-${leg.legId}`} tabIndex={-1} aria-labelledby={`leg-title-${leg.legId}`} className="border border-rule-strong">
       <div className="flex flex-wrap items-center justify-between gap-x-4 gap-y-1 border-b border-rule-strong bg-manila px-4 py-2.5">
         <div>
           <p className="lab">

@@ -11,7 +11,7 @@ import { ArrivalForm } from "./arrival-form";
 import { ArrivalSigned } from "./arrival-view";
 import { Closing } from "./closing";
 import { LegBlock } from "./leg-block";
-import type { FormSwitch, OpenForm } from "./open-form";
+import { homeOf, type FormSwitch, type OpenForm } from "./open-form";
 
 function Arrival({ moveId, movement, switcher }: { moveId: string; movement: Movement; switcher: FormSwitch }) {
   const { arrival, arrived, may, placed, destination } = movement;
@@ -26,8 +26,12 @@ function Arrival({ moveId, movement, switcher }: { moveId: string; movement: Mov
 /** Instruction, release, sightings, arrival and closing of a move, kept up to date while they are looked at. */
 export function MovementTab({ moveId }: { moveId: string }) {
   const { data: movement, isError } = useQuery(movementOptions(moveId));
-  const [open, show] = useState<OpenForm | null>(null);
+  const [open, setOpen] = useState<OpenForm | null>(null);
   if (!movement) return null;
+  const show = (form: OpenForm | null) => {
+    if (!form && open) document.getElementById(homeOf(open))?.focus({ preventScroll: true });
+    setOpen(form);
+  };
   const switcher = { open, show };
   const current = movement.legs.find((leg) => !leg.takenOver);
   return (
@@ -36,13 +40,13 @@ export function MovementTab({ moveId }: { moveId: string }) {
         {movement.legs.map((leg) => (
           <LegBlock key={leg.legId} {...{ moveId, movement, leg, switcher }} current={leg === current} />
         ))}
-        <section aria-labelledby="arrival-title" id="arrival" className="border border-rule-strong px-4 py-4">
+        <section aria-labelledby="arrival-title" id="arrival" tabIndex={-1} className="border border-rule-strong px-4 py-4">
           <h3 id="arrival-title" className="mb-2 text-17 font-[680]">
             Arrival at {movement.destination.name}
           </h3>
           <Arrival {...{ moveId, movement, switcher }} />
         </section>
-        <section aria-labelledby="closing-title" id="closing" className="border border-rule-strong px-4 py-4">
+        <section aria-labelledby="closing-title" id="closing" tabIndex={-1} className="border border-rule-strong px-4 py-4">
           <h3 id="closing-title" className="mb-2 text-17 font-[680]">
             Closing
           </h3>

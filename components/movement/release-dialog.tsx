@@ -38,7 +38,7 @@ export function ReleaseDialog({ moveId, unit, leg, open, onClose }: Props) {
   );
   return (
     <Dialog open={open} onClose={onClose} title="Release the unit" actions={actions}>
-      <form id={form} noValidate onSubmit={submit} className="grid gap-4">
+      <form id={form} noValidate onSubmit={submit} className="grid grid-cols-[minmax(0,1fr)] gap-4">
         <FormErrors errors={faults.list} title="Not released." />
         <p className="text-15">{releaseStatement(unit, leg.carrierName)}</p>
         <ul className="list-disc pl-5 text-14">

@@ -11,6 +11,7 @@ import { TextField } from "@/components/ui/text-field";
 import { faultsOf } from "@/lib/entry/fetcher";
 import { retractSightingMutation } from "@/lib/movement/options";
 import type { MovementLeg } from "@/lib/movement/types";
+import { focusOpened } from "./open-form";
 
 /** Takes a sighting back; it stays on record, struck through, with the reason. */
 export function RetractForm({ moveId, leg, sightingId, onDone }: { moveId: string; leg: MovementLeg; sightingId: string; onDone: () => void }) {
@@ -25,7 +26,7 @@ export function RetractForm({ moveId, leg, sightingId, onDone }: { moveId: strin
     retract.mutate({ sightingId, key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
   };
   return (
-    <form noValidate onSubmit={submit} className="my-3 grid gap-3 border-t-2 border-ink pt-4">
+    <form ref={focusOpened} tabIndex={-1} noValidate onSubmit={submit} className="outline-none my-3 grid grid-cols-[minmax(0,1fr)] gap-3 border-t-2 border-ink pt-4">
       <FormErrors errors={faults.list} title="Not taken back." />
       <TextField name="why" label="Why it is taken back" hint="It stays readable, struck through, with this reason." required value={why} onChange={(event) => setWhy(event.target.value)} error={faults.field("why")} />
       {leg.may.enterFor && <EnteredForFields value={heard} onChange={setHeard} errors={faults.field} carrierName={leg.carrierName} />}

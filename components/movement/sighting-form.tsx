@@ -19,7 +19,7 @@ import { makeSightingMutation } from "@/lib/movement/options";
 import { kindsForReceiver } from "@/lib/movement/rules";
 import type { Movement, MovementLeg, SightingView } from "@/lib/movement/types";
 import { SIGHTING_KINDS } from "@/lib/movement/vocabulary";
-import { zoneLabel } from "@/lib/moves/zones";
+import { focusOpened } from "./open-form";
 import { useSighting } from "./use-sighting";
 
 type Props = { moveId: string; leg: MovementLeg; destination: Movement["destination"]; corrects?: SightingView; onDone: () => void };
@@ -56,7 +56,7 @@ export function SightingForm({ moveId, leg, destination, corrects, onDone }: Pro
     make.mutate({ key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
   };
   return (
-    <form noValidate onSubmit={submit} className="my-3 grid gap-3.5 border-t-2 border-ink pt-4">
+    <form ref={focusOpened} tabIndex={-1} noValidate onSubmit={submit} className="outline-none my-3 grid grid-cols-[minmax(0,1fr)] gap-3.5 border-t-2 border-ink pt-4">
       <FormErrors errors={faults.list} title={corrects ? "Not corrected." : "Not recorded."} />
       {both && (
         <RadioGroup name="how" label="How do you know?" inline value={own ? "own" : "told"} onChange={(event) => setOwn(event.target.value === "own")}
@@ -76,7 +76,7 @@ export function SightingForm({ moveId, leg, destination, corrects, onDone }: Pro
         <TextField name="place" label="Where" required value={typed.place} error={faults.field("place")} autoComplete="off" onChange={(event) => sighting.setPlace(event.target.value)} />
         <ZoneField name="zone" required value={typed.zone} error={faults.field("zone")} onChange={sighting.setZone} />
       </div>
-      <TimeField name="occurredAt" label="When, by the clock there" required withDate zone={zoneLabel(typed.zone)} value={typed.occurredAt} error={faults.field("occurredAt")} onChange={(event) => sighting.setTime(event.target.value)} />
+      <TimeField name="occurredAt" label="When, by the clock there" required withDate zone={sighting.zoneShort} value={typed.occurredAt} error={faults.field("occurredAt")} onChange={(event) => sighting.setTime(event.target.value)} />
       <TextField name="train" label="Train" value={typed.train} error={faults.field("train")} autoComplete="off" onChange={(event) => set({ train: event.target.value })} />
       <TextArea name="note" label="Note" hint={typed.kind === "bad-ordered" || typed.kind === "held" ? "The reason as it was given, and for how long." : undefined} rows={2} value={typed.note} error={faults.field("note")} onChange={(event) => set({ note: event.target.value })} />
       <PhotoField moveId={moveId} label="Photos" value={sighting.photos} onChange={sighting.setPhotos} error={faults.field("photoIds")} />

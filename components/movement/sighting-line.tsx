@@ -55,10 +55,10 @@ export function SightingLine({ moveId, leg, sighting, destination, switcher }: P
           )}
           {mayRetract && !mine && (
             <div className="mt-1 flex gap-4">
-              <Button variant="plain" size="small" onClick={() => show({ form: "correct", id })}>
+              <Button variant="plain" size="small" onClick={() => show({ form: "correct", legId: leg.legId, id })}>
                 Correct
               </Button>
-              <Button variant="plain" size="small" onClick={() => show({ form: "retract", id })}>
+              <Button variant="plain" size="small" onClick={() => show({ form: "retract", legId: leg.legId, id })}>
                 Take back
               </Button>
             </div>

@@ -4,9 +4,15 @@ import type { PhotoView } from "@/lib/evidence/types";
 import { usualPlace } from "@/lib/movement/prefill";
 import type { Movement, MovementLeg, SightingView } from "@/lib/movement/types";
 import type { SightingKind } from "@/lib/movement/vocabulary";
-import { toWall } from "@/lib/moves/when";
+import { toWall, zoneName } from "@/lib/moves/when";
 
-const nowAt = (zone: string) => toWall(new Date().toISOString(), zone);
+const nowAt = (zone: string) => zone && toWall(new Date().toISOString(), zone);
+
+/** The zone's short name about the typed time; within a day of a change of the clocks it may be the other one. */
+function shortZone(zone: string, wall: string): string {
+  const near = new Date(`${wall}:00Z`);
+  return zone === "" ? "" : zoneName(zone, Number.isNaN(near.getTime()) ? new Date() : near);
+}
 
 type Typed = { kind: SightingKind | ""; place: string; zone: string; occurredAt: string; train: string; note: string };
 
@@ -30,6 +36,7 @@ export function useSighting(leg: MovementLeg, kinds: readonly SightingKind[], de
   const inZone = (zone: string) => ({ zone, ...(!touched.time && { occurredAt: nowAt(zone) }) });
   return {
     typed, photos, heard, setPhotos, setHeard, set,
+    zoneShort: shortZone(typed.zone, typed.occurredAt),
     choose: (kind: SightingKind) => {
       const usual = usualPlace(kind, leg, destination);
       set({ kind, ...(usual && !touched.place && { place: usual.place, ...inZone(usual.zone) }) });

@@ -11,6 +11,7 @@ import { TextField } from "@/components/ui/text-field";
 import { faultsOf } from "@/lib/entry/fetcher";
 import { withdrawInstructionMutation } from "@/lib/movement/options";
 import type { MovementLeg } from "@/lib/movement/types";
+import { focusOpened } from "./open-form";
 
 /** Takes an instruction back, with the reason; everybody on the move sees it. */
 export function WithdrawForm({ moveId, leg, instructionId, onDone }: { moveId: string; leg: MovementLeg; instructionId: string; onDone: () => void }) {
@@ -25,7 +26,7 @@ export function WithdrawForm({ moveId, leg, instructionId, onDone }: { moveId: s
     withdraw.mutate({ instructionId, key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
   };
   return (
-    <form noValidate onSubmit={submit} className="mt-3 grid gap-3 border-t-2 border-ink pt-4">
+    <form ref={focusOpened} tabIndex={-1} noValidate onSubmit={submit} className="outline-none mt-3 grid grid-cols-[minmax(0,1fr)] gap-3 border-t-2 border-ink pt-4">
       <FormErrors errors={faults.list} title="Not withdrawn." />
       <TextField name="why" label="Why it is withdrawn" required value={why} onChange={(event) => setWhy(event.target.value)} error={faults.field("why")} />
       {leg.may.enterFor && <EnteredForFields value={heard} onChange={setHeard} errors={faults.field} carrierName={leg.carrierName} />}

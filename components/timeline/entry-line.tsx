@@ -20,12 +20,13 @@ function Words({ entry: { parts, link } }: { entry: Entry }) {
   );
 }
 
-function Aside({ entry: { state, photos, link } }: { entry: Entry }) {
-  if (!state && photos === 0) return null;
+function Aside({ entry: { state, struck, photos, link } }: { entry: Entry }) {
+  const shown = struck ? null : state;
+  if (!shown && photos === 0) return null;
   return (
     <span className="flex flex-wrap items-center gap-2 sm:justify-end">
       {photos > 0 && (link ? <Link href={link} className="inline-link text-14">{many(photos, "photo")}</Link> : <span className="text-14 text-ink-2">{many(photos, "photo")}</span>)}
-      {state && <State tone={state.tone}>{state.word}</State>}
+      {shown && <State tone={shown.tone}>{shown.word}</State>}
     </span>
   );
 }

@@ -18,6 +18,7 @@ function wanted({ wantedFrom, wantedTo }: FollowView): string {
 /** What somebody sees who follows a move by a link: the unit, its way, and what was told outside the case. */
 export function FollowPage({ view }: { view: FollowView }) {
   const { unit, from, to, days } = view;
+  const last = days.flatMap((day) => day.entries).find((entry) => entry.seen && !entry.struck);
   return (
     <>
       <div className="border border-rule-strong bg-sheet lg:grid lg:grid-cols-[330px_minmax(0,1fr)]">
@@ -40,6 +41,9 @@ export function FollowPage({ view }: { view: FollowView }) {
           </Box>
           <Box label="Stage" span={3}>
             {view.stage}
+          </Box>
+          <Box label="Last seen" span={12} detail={last ? formatWhen(last.at, last.zone) : "Carriers and receiver report it once it moves."}>
+            {last ? last.text : "Not on its way yet"}
           </Box>
         </BoxGrid>
       </div>

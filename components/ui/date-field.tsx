@@ -27,7 +27,7 @@ export function TimeField({ label, hint, error, required, className, zone, withD
   return (
     <FieldFrame id={described.id} {...{ label, hint, error, required, className: clsx(withDate ? "max-w-96" : "max-w-72", className) }}>
       <div className="flex items-stretch">
-        <input {...props} {...described} type={withDate ? "datetime-local" : "time"} required={required} className="field-box font-mono" />
+        <input {...props} {...described} type={withDate ? "datetime-local" : "time"} required={required} className={clsx("field-box min-w-0 font-mono", withDate && "max-sm:px-2! max-sm:tracking-[-0.05em]")} />
         <span className="flex items-center border border-l-0 border-rule-strong bg-manila px-3 text-14 whitespace-nowrap text-ink-2">{zone}</span>
       </div>
     </FieldFrame>

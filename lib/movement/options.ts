@@ -1,4 +1,4 @@
-import { mutationOptions, queryOptions } from "@tanstack/react-query";
+import { mutationOptions, queryOptions, type QueryClient } from "@tanstack/react-query";
 import { call, read } from "@/lib/entry/fetcher";
 import { moveKeys } from "@/lib/moves/options";
 import { routes } from "@/lib/routes";
@@ -11,11 +11,15 @@ export const movementOptions = (moveId: string) =>
 
 type Sent = { key: string; body: Record<string, unknown> };
 
+const readAnew = (client: QueryClient, moveId: string) =>
+  Promise.all([client.invalidateQueries({ queryKey: movementKeys.ofMove(moveId) }), client.invalidateQueries({ queryKey: moveKeys.case(moveId) })]);
+
 const mutation = <V extends Sent>(moveId: string, path: (sent: V) => string) =>
   mutationOptions({
     mutationFn: (sent: V) => call(path(sent), sent.body, sent.key),
-    onSettled: (_data, _error, _sent, _result, { client }) =>
-      Promise.all([client.invalidateQueries({ queryKey: movementKeys.ofMove(moveId) }), client.invalidateQueries({ queryKey: moveKeys.case(moveId) })]),
+    onSuccess: (_data, _sent, _result, { client }) => readAnew(client, moveId),
+    // A refusal is shown at once; what it was about is read anew beside it.
+    onError: (_error, _sent, _result, { client }) => void readAnew(client, moveId),
   });
 
 export const giveInstructionMutation = (moveId: string) => mutation(moveId, () => routes.api.instructions(moveId));

@@ -61,6 +61,15 @@ function linkOf(moveId: string, kind: RecordKind, detail: RawEntry["detail"], se
   return place ? routes[place](moveId) : null;
 }
 
+/** Originals that arrived within a day of their photo say nothing new; a later one does. */
+function withoutPromptOriginals(entries: readonly Known[]): Known[] {
+  const taken = new Map(entries.filter((entry) => entry.kind === "photo.taken").map((entry) => [textOf(entry.detail, "photoId"), entry.at]));
+  return entries.filter(({ kind, detail, at }) => {
+    const since = kind === "photo.kept" ? taken.get(textOf(detail, "photoId")) : undefined;
+    return since === undefined || daysBetween(since, at) > 0;
+  });
+}
+
 type Frame = { moveId: string; parts: readonly HeldPart[]; struck: ReadonlyMap<string, string> };
 
 function entryOf(entry: Known, zone: string, { moveId, parts, struck }: Frame): Entry {
@@ -83,12 +92,13 @@ export function assemble({ moveId, parts, originZone, entries, waits, now, open,
   const known = inOrder(entries);
   const struck = takenBack(known);
   const zones = zonesOf(known, originZone, struck);
-  const seen = known.map((entry, at) => ({ entry, zone: zones[at] ?? originZone })).filter(({ entry }) => maySeeEntry(parts, entry)).reverse();
+  const told = new Set(withoutPromptOriginals(known));
+  const seen = known.map((entry, at) => ({ entry, zone: zones[at] ?? originZone })).filter(({ entry }) => told.has(entry) && maySeeEntry(parts, entry)).reverse();
   const page = seen.slice(0, show);
   const oldest = page.at(-1)?.entry.happenedAt ?? "";
   const quiet = quietStretches(known.map((entry) => entry.happenedAt), waits, open ? now : null).filter((one) => page.length === seen.length || one.from >= oldest);
-  const told = page.map(({ entry, zone }) => entryOf(entry, zone, { moveId, parts, struck }));
-  return { rows: rowsOf(told, quiet.reverse()), shown: page.length, total: seen.length };
+  const lines = page.map(({ entry, zone }) => entryOf(entry, zone, { moveId, parts, struck }));
+  return { rows: rowsOf(lines, quiet.reverse()), shown: page.length, total: seen.length };
 }
 
 function rowsOf(entries: readonly Entry[], quiet: readonly Quiet[]): TimelineRow[] {

@@ -7,6 +7,11 @@ export type DaysOf = { id: string; part: Part; label: string; days: number };
 
 export type Waited = { part: Part; name: string; since: string; until: string | null };
 
+const SHORT: Partial<Record<Part, string>> = { owner: "Owner", contractor: "Contractor", receiver: "Receiver", payer: "Payer" };
+
+/** Whoever there is one of goes by their part; carriers by name and work. */
+const labelOf = (wait: Waited) => SHORT[wait.part] ?? waitName(wait);
+
 const ms = (iso: string) => new Date(iso).getTime();
 
 /**
@@ -18,8 +23,8 @@ export function whereDaysWent(waits: readonly Waited[], openedAt: string, end: s
   const total = daysBetween(openedAt, end);
   const sums = new Map<string, DaysOf & { exact: number }>();
   for (const wait of waits) {
-    const label = waitName(wait);
-    const sum = sums.get(label) ?? { id: `${wait.part} ${wait.name}`, part: wait.part, label, days: 0, exact: 0 };
+    const label = labelOf(wait);
+    const sum = sums.get(label) ?? { id: label, part: wait.part, label, days: 0, exact: 0 };
     sum.exact += Math.max(0, Math.min(ms(wait.until ?? end), ms(end)) - Math.max(ms(wait.since), ms(openedAt))) / 86_400_000;
     sums.set(label, sum);
   }

@@ -44,7 +44,7 @@ export function followDays(entries: readonly RawEntry[], originZone: string): { 
   const zones = zonesOf(known, originZone, struck);
   const told = known.flatMap(({ id, kind, detail, happenedAt: at }, index): FollowEntry[] => {
     const text = followSentence(kind, detail);
-    return text === null ? [] : [{ id, at, zone: zones[index] ?? originZone, text, struck: kind === "sighting.made" && struck.has(textOf(detail, "sightingId") ?? "") }];
+    return text === null ? [] : [{ id, at, zone: zones[index] ?? originZone, text, struck: kind === "sighting.made" && struck.has(textOf(detail, "sightingId") ?? ""), seen: kind === "sighting.made" }];
   });
   const days: { day: string; entries: FollowEntry[] }[] = [];
   for (const entry of told.reverse()) {

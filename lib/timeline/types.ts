@@ -77,7 +77,7 @@ export type Timeline = {
 };
 
 /** One line of what a notify party reads: no names of people, no money. */
-export type FollowEntry = { id: string; at: string; zone: string; text: string; struck: boolean };
+export type FollowEntry = { id: string; at: string; zone: string; text: string; struck: boolean; /** A report of where the unit was. */ seen: boolean };
 
 export type FollowView = {
   unit: { mark: string; number: string; shape: BodyShape; axles: Axles };

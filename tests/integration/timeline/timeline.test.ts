@@ -116,7 +116,7 @@ it("quiet days say whom they waited on", async () => {
   const later = new Date(Date.now() + 5 * 24 * 3600_000);
   const { rows, days } = await getTimeline(move.owner, move.moveId, ALL, later);
   expect(rows[0]).toMatchObject({ type: "quiet", days: 5, goesOn: true, name: "Ibarra Rail Mechanical" });
-  expect(days).toMatchObject({ total: 5, parts: [{ label: "Ibarra Rail Mechanical", days: 5 }] });
+  expect(days).toMatchObject({ total: 5, parts: [{ label: "Contractor", days: 5 }] });
 });
 
 /** A link of a move, as its token. */

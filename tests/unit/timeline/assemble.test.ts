@@ -45,13 +45,20 @@ describe("the timeline", () => {
 
   it("puts runs of photos and items of one day and hand together", () => {
     const entries = [
-      anEntry("photo.taken", on(0)), anEntry("photo.kept", on(0.01), {}, { byName: "Photo check" }), anEntry("photo.taken", on(0.02)), anEntry("prep.done", on(0.03), { templateId: "P1", action: "Capped" }),
+      anEntry("photo.taken", on(0), { photoId: "a" }), anEntry("photo.kept", on(0.01), { photoId: "a" }, { byName: "Photo check" }), anEntry("photo.taken", on(0.02)), anEntry("prep.done", on(0.03), { templateId: "P1", action: "Capped" }),
       anEntry("prep.done", on(0.04), { templateId: "P2", action: "Drained" }), anEntry("prep.signed", on(0.05)), anEntry("photo.taken", on(0.06)), anEntry("prep.done", on(0.07), { templateId: "P3", action: "Tagged" }, { byName: "Somebody else" }),
     ];
     const [row] = assemble(given(entries)).rows;
     expect(row?.type === "day" && row.entries.map((entry) => [plainText(entry.parts), entry.folded])).toEqual([
-      ["Did P3, tagged", []], ["Took a photo", []], ["Prep signed", []], ["Worked off 2 prep items", ["Did P2, drained", "Did P1, capped"]], ["Took 2 photos", []], ["A photo’s original has arrived and is the one that was announced", []],
+      ["Did P3, tagged", []], ["Took a photo", []], ["Prep signed", []], ["Worked off 2 prep items", ["Did P2, drained", "Did P1, capped"]], ["Took 2 photos", []],
     ]);
+  });
+
+  it("tells of an original only when it came a day or more after its photo", () => {
+    const photo = (id: string, keptAt: string) => [anEntry("photo.taken", on(0), { photoId: id }), anEntry("photo.kept", keptAt, { photoId: id }, { byName: "Photo check" })];
+    const { rows, total } = assemble(given([...photo("prompt", on(0.2)), ...photo("late", on(2))]));
+    expect(shape(rows)).toEqual([["2026-11-05", "A photo’s original has arrived and is the one that was announced"], ["2026-11-03", "Took 2 photos"]]);
+    expect(total).toBe(3);
   });
 
   it("leaves out a kind that it does not know", () => {

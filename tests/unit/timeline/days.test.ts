@@ -19,7 +19,7 @@ describe("where the days went", () => {
     ];
     const { total, parts } = whereDaysWent(waits, on(0), on(61));
     expect(total).toBe(61);
-    expect(parts.map(({ label, days }) => [label, days])).toEqual([["Vellum Ridge", 9], ["Ibarra", 35], ["Quillan, inspector", 17]]);
+    expect(parts.map(({ label, days }) => [label, days])).toEqual([["Owner", 9], ["Contractor", 35], ["Quillan, inspector", 17]]);
   });
 
   it("sums to the days that passed when somebody was always waited on", () => {

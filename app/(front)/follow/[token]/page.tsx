@@ -7,7 +7,7 @@ import { AppError } from "@/lib/errors";
 import { unsafeOpenFollow } from "@/lib/timeline/commands";
 
 /** Alike for every link, so that a title gives nothing away. */
-export const metadata: Metadata = { title: "Follow a move", robots: { index: false, follow: false, noarchive: true }, referrer: "no-referrer" };
+export const metadata: Metadata = { title: "Follow a move", robots: { index: false, follow: false, noarchive: true } };
 
 const REFRESH_SECONDS = 60;
 
