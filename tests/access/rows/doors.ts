@@ -56,7 +56,7 @@ const CASE: Door[] = [
   open("case", `GET ${M}/inspections`),
   open("case", `POST ${M}/inspections`, ({ legId }) => ({ legId, visitedOn: "2026-01-05", place: "Sand Hollow", zone, inspectorName: "V. Sorrel", air: "off" })),
   open("case", `GET ${M}/findings`),
-  open("case", `POST ${M}/findings`, ({ inspectionId }) => ({ inspectionId, componentId: "flat-spot", observed: "Flat along the tread.", severity: "note", photoIds: [], noPhotoReason: "The light was gone." })),
+  open("case", `POST ${M}/findings`, ({ inspectionId }) => ({ inspectionId, componentId: "flat-spot", placeId: "wheel-R4", observed: "Flat along the tread.", severity: "note", photoIds: [], noPhotoReason: "The light was gone." })),
   open("case", `GET ${M}/findings/[findingId]`),
   open("case", `POST ${M}/findings/[findingId]/answer`, () => ({ version: 1, text: "Turned.", photoIds: [] })),
   open("case", `POST ${M}/findings/[findingId]/clear`, () => ({ version: 1 })),
