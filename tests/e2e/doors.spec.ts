@@ -35,7 +35,7 @@ test.describe("doors", () => {
     });
   }
 
-  const opens = (page: PageRow, cookie: string | null, request: APIRequestContext, ids = world.ids) => overTheWire(request)({ ...readOf(page.page, ids, cookie), path: pathOf(page.page, ids).replaceAll(/no-token/g, "0123456789abcdef0123456789abcdef") });
+  const opens = (page: PageRow, cookie: string | null, request: APIRequestContext, ids = world.ids) => overTheWire(request)({ ...readOf(page.page, ids, cookie), path: pathOf(`${page.page}${page.behind ?? ""}`, ids).replaceAll(/no-token/g, "0123456789abcdef0123456789abcdef") });
   const isIn = (page: PageRow, ...who: PageRow["who"][]) => who.includes(page.who);
 
   for (const page of PAGES) {
@@ -59,17 +59,24 @@ test.describe("doors", () => {
   }
 
   test("every page answers who it is for", async ({ request }) => {
-    const [owner, admin] = [await world.cookieOf("owner"), await world.cookieOf("siteAdmin")];
-    const answers = await Promise.all(PAGES.filter((page) => !isIn(page, "link")).map(async (page) => [page.page, (await opens(page, isIn(page, "administration") ? admin : owner, request)).status] as const));
-    // Signed in already: the sign-in page leads on. A form whose turn it is not may do so too.
-    expect(answers.filter(([, status]) => ![200, 307].includes(status))).toEqual([]);
+    const cookies = await Promise.all((["owner", "inspectorA", "clerkA", "siteAdmin"] as const).map((persona) => world.cookieOf(persona)));
+    const shut: string[] = [];
+    for (const page of PAGES.filter((one) => !isIn(one, "link"))) {
+      const statuses = await Promise.all(cookies.map(async (cookie) => (await opens(page, cookie, request)).status));
+      // Somebody signed in is led on from the sign-in page, and from a form whose turn it is not.
+      if (!statuses.some((status) => status === 200 || status === 307)) shut.push(`${page.page}: ${statuses.join(", ")}`);
+    }
+    expect(shut).toEqual([]);
   });
 
   test("a method that is none gets no further", async ({ request }) => {
     const cookie = await world.cookieOf("owner");
     expect((await request.fetch("/api/v1/account", { headers: { cookie } })).status()).toBe(200);
     expect((await request.fetch("/api/v1/account", { method: "PATCH", headers: { cookie } })).status()).toBe(405);
-    expect((await request.fetch("/api/v1/account", { method: "TRACE", headers: { cookie } }).catch(() => null))?.status() ?? 405).toBe(405);
+    // The framework has no word for TRACE and fails before our code; what counts is that nothing is echoed.
+    const traced = await request.fetch("/api/v1/account", { method: "TRACE", headers: { cookie, "x-canary": "ocker" } });
+    expect(traced.status()).toBeGreaterThanOrEqual(400);
+    expect(await traced.text()).not.toContain("ocker");
   });
 
   test("a form that works without script is taken from our own pages alone", async ({ request }) => {

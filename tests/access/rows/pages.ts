@@ -1,5 +1,5 @@
-/** `anybody`; `link`: anybody, but only a good token in the address does something; `signed-in`; and those for whoever has a part in a case, a company or the site's administration: to others there is no such page. */
-export type PageRow = { page: string; who: "anybody" | "link" | "signed-in" | "case" | "company" | "draft" | "administration" };
+/** `anybody`; `link`: anybody, but only a good token in the address does something; `signed-in`; and those for whoever has a part in a case, a company or the site's administration: to others there is no such page. `behind` stands after the path when it is opened for something. */
+export type PageRow = { page: string; who: "anybody" | "link" | "signed-in" | "case" | "company" | "draft" | "administration"; behind?: string };
 
 const rows = (who: PageRow["who"], ...pages: string[]): PageRow[] => pages.map((page) => ({ page, who }));
 
@@ -14,7 +14,8 @@ export const PAGES: readonly PageRow[] = [
   ...rows(
     "case",
     "/moves/[moveId]", "/moves/[moveId]/prep", "/moves/[moveId]/unit", "/moves/[moveId]/movement", "/moves/[moveId]/timeline", "/moves/[moveId]/people",
-    "/moves/[moveId]/findings", "/moves/[moveId]/findings/[findingId]", "/moves/[moveId]/findings/new", "/moves/[moveId]/findings/visit", "/moves/[moveId]/findings/accept/[legId]",
+    "/moves/[moveId]/findings", "/moves/[moveId]/findings/[findingId]", "/moves/[moveId]/findings/visit", "/moves/[moveId]/findings/accept/[legId]",
     "/moves/[moveId]/fees", "/moves/[moveId]/fees/paid", "/moves/[moveId]/fees/quote/[legId]",
   ),
+  { page: "/moves/[moveId]/findings/new", who: "case", behind: "?visit=[inspectionId]" },
 ];
