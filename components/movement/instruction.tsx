@@ -43,8 +43,8 @@ export function Instruction({ moveId, leg, switcher }: { moveId: string; leg: Mo
   const writing = open?.form === "instruction" && open.legId === leg.legId;
   const withdrawing = open?.form === "withdraw" && open.id === instruction?.id;
   return (
-    <section aria-labelledby={`instruction-${leg.legId}`}>
-      <h4 id={`instruction-${leg.legId}`} className="lab mb-1.5">
+    <div>
+      <h4 className="lab mb-1.5">
         Movement instruction
       </h4>
       {instruction ? <Given instruction={instruction} zone={leg.fromZone} /> : <p className="text-14 text-ink-2">{leg.takenOver ? "None stands." : `Not given yet. ${carrierName}’s transport desk gives it when acceptance and billing stand.`}</p>}
@@ -66,6 +66,6 @@ export function Instruction({ moveId, leg, switcher }: { moveId: string; leg: Mo
           )}
         </div>
       )}
-    </section>
+    </div>
   );
 }

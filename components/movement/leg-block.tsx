@@ -34,8 +34,8 @@ function Sightings({ moveId, movement, leg, switcher }: Omit<Props, "current">) 
   const own = movement.sightings.filter((one) => one.legId === leg.legId);
   const writing = open?.form === "sighting" && open.legId === leg.legId;
   return (
-    <section aria-labelledby={`sightings-${leg.legId}`}>
-      <h4 id={`sightings-${leg.legId}`} className="lab mb-0.5">
+    <div>
+      <h4 className="lab mb-0.5">
         Sightings
       </h4>
       {own.length > 0 ? (
@@ -53,7 +53,7 @@ function Sightings({ moveId, movement, leg, switcher }: Omit<Props, "current">) 
           {recordWords(leg)}
         </Button>
       )}
-    </section>
+    </div>
   );
 }
 

@@ -13,8 +13,8 @@ export function Release({ moveId, unit, leg, switcher }: { moveId: string; unit:
   const { release } = leg;
   const unmet = leg.conditions.filter((one) => BEFORE.includes(one.id) && !one.met);
   return (
-    <section aria-labelledby={`release-${leg.legId}`}>
-      <h4 id={`release-${leg.legId}`} className="lab mb-1.5">
+    <div>
+      <h4 className="lab mb-1.5">
         Released by the owner
       </h4>
       {release ? (
@@ -35,6 +35,6 @@ export function Release({ moveId, unit, leg, switcher }: { moveId: string; unit:
           <ReleaseDialog moveId={moveId} unit={unit} leg={leg} open={switcher.open?.form === "release"} onClose={() => switcher.show(null)} />
         </div>
       )}
-    </section>
+    </div>
   );
 }

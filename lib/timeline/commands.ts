@@ -6,7 +6,7 @@ import { unsafeCountTry } from "@/lib/viewer/commands";
 import { unsafeFollow } from "./queries";
 import type { FollowView } from "./types";
 
-/** The page reads itself again every minute; an open one is one use, not sixty in an hour. */
+/** An open page reads itself again every minute; it is one use, not sixty in an hour. */
 const SAME_USE_MS = 3 * 60_000;
 
 /** No viewer: a notify party has no account. Counts the try of an address first, so that links can't be guessed in numbers, then the use of the link; null for a link that is not good. */

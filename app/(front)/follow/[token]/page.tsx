@@ -2,6 +2,7 @@ import type { Metadata } from "next";
 import { notFound } from "next/navigation";
 import { Page } from "@/components/shell/page";
 import { FollowPage } from "@/components/timeline/follow-page";
+import { ReadAgain } from "@/components/timeline/read-again";
 import { callerAddress } from "@/lib/entry/address";
 import { AppError } from "@/lib/errors";
 import { unsafeOpenFollow } from "@/lib/timeline/commands";
@@ -35,7 +36,7 @@ export default async function FollowByLink({ params }: { params: Promise<{ token
   }
   return (
     <Page>
-      <meta httpEquiv="refresh" content={String(REFRESH_SECONDS)} />
+      <ReadAgain seconds={REFRESH_SECONDS} />
       <FollowPage view={view} />
     </Page>
   );
