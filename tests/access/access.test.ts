@@ -92,19 +92,19 @@ for (const [room, rows] of Object.entries(TABLE)) {
           });
           return;
         }
-        it.runIf(outside(row).length > 0)("tells nobody outside that there is such a thing", async () => {
+        if (outside(row).length > 0) it("tells nobody outside that there is such a thing", async () => {
           const ready = await row.prepare();
           expect(await leavesAllAsItWas(row, () => askAll(outside(row), (persona) => learnsNothing(row, ready, persona)))).toEqual([]);
         });
-        it.runIf(wrong(row).length > 0)("refuses every wrong part", async () => {
+        if (wrong(row).length > 0) it("refuses every wrong part", async () => {
           const ready = await row.prepare();
           expect(await leavesAllAsItWas(row, () => askAll(wrong(row), (persona) => ask(ready, persona, expectCode(persona, row.wrongCode))))).toEqual([]);
         });
-        it.runIf(row.empty.length > 0)("gives nothing to whom it does not concern", async () => {
+        if (row.empty.length > 0) it("gives nothing to whom it does not concern", async () => {
           const ready = await row.prepare();
           expect(await askAll(row.empty, (persona) => ask(ready, persona, (outcome) => (saidBy(outcome) === "null" ? null : `${persona} gets ${saidBy(outcome)}`)))).toEqual([]);
         });
-        it.runIf(row.right.length > 0)("is done by every right part", async () => {
+        if (row.right.length > 0) it("is done by every right part", async () => {
           expect(await askAll(row.right, (persona) => succeeds(row, persona))).toEqual([]);
         });
       });
