@@ -68,7 +68,8 @@ function SignForm({ moveId, leg, unit, entering }: { moveId: string; leg: Accept
   const submit = (event: FormEvent) => {
     event.preventDefault();
     const body = { ...given, legId: leg.legId, restrictions, rowsHash: seen, enteredFor: entering ? enteredFor : null };
-    sign.mutate({ key: intent.key(body), body }, { onSuccess: () => { intent.done(); router.push(routes.findings(moveId)); } });
+    // Awaited, not given as a callback: once the acceptance stands this form is gone, and callbacks of a form that is gone are not called.
+    void sign.mutateAsync({ key: intent.key(body), body }).then(() => { intent.done(); router.push(routes.findings(moveId)); }, () => undefined);
   };
   return (
     <form noValidate onSubmit={submit} className="grid gap-5">

@@ -28,7 +28,8 @@ function DoneForm({ moveId, item, onDone, onSkip }: { moveId: string; item: Prep
   const submit = (event: FormEvent) => {
     event.preventDefault();
     const body = { version: item.version, ...given, photoIds: photos.map((photo) => photo.id) };
-    finish.mutate({ itemId: item.id, act: "done", key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
+    // Awaited, not given as a callback: once the list is read anew this form is gone, and callbacks of a form that is gone are not called.
+    void finish.mutateAsync({ itemId: item.id, act: "done", key: intent.key(body), body }).then(() => { intent.done(); onDone(); }, () => undefined);
   };
   return (
     <form noValidate onSubmit={submit} className="grid gap-3">
@@ -53,7 +54,7 @@ function SkipForm({ moveId, item, onDone, onBack }: { moveId: string; item: Prep
   const submit = (event: FormEvent) => {
     event.preventDefault();
     const body = { version: item.version, why };
-    skip.mutate({ itemId: item.id, act: "skip", key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
+    void skip.mutateAsync({ itemId: item.id, act: "skip", key: intent.key(body), body }).then(() => { intent.done(); onDone(); }, () => undefined);
   };
   return (
     <form noValidate onSubmit={submit} className="grid gap-3">

@@ -55,7 +55,7 @@ function Phase({ moveId, prep, phase }: { moveId: string; prep: PrepList; phase:
       {byGroup(prep.items, phase.phase).map(({ group, items, left }) => (
         <Group key={group} name={GROUP_LABELS[group]} done={items.length - left} total={items.length}>
           {items.map((item) => (
-            <PrepRow key={item.id} moveId={moveId} item={item} zone={prep.originZone} may={prep.may.work && !waits} open={openId === item.id} onOpen={(open) => setOpenId(open ? item.id : null)} />
+            <PrepRow key={item.id} moveId={moveId} item={item} zone={prep.originZone} may={prep.may.work && !waits} open={openId === item.id} onOpen={(open) => setOpenId((now) => (open ? item.id : now === item.id ? null : now))} />
           ))}
         </Group>
       ))}

@@ -21,7 +21,7 @@ export function ReopenForm({ moveId, item, onDone }: { moveId: string; item: Pre
   const submit = (event: FormEvent) => {
     event.preventDefault();
     const body = { version: item.version, why };
-    reopen.mutate({ itemId: item.id, act: "reopen", key: intent.key(body), body }, { onSuccess: () => { intent.done(); onDone(); } });
+    void reopen.mutateAsync({ itemId: item.id, act: "reopen", key: intent.key(body), body }).then(() => { intent.done(); onDone(); }, () => undefined);
   };
   return (
     <form noValidate onSubmit={submit} className="grid gap-3">

@@ -22,7 +22,7 @@ export function RestoreBoard({ moveId, prep, twins }: { moveId: string; prep: Pr
       ) : (
         <ol className="border border-rule-strong">
           {twins.map((item) => (
-            <RestoreRow key={item.id} {...{ moveId, item, prep }} open={openId === item.id} onOpen={(open) => setOpenId(open ? item.id : null)} />
+            <RestoreRow key={item.id} {...{ moveId, item, prep }} open={openId === item.id} onOpen={(open) => setOpenId((now) => (open ? item.id : now === item.id ? null : now))} />
           ))}
         </ol>
       )}
