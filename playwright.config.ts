@@ -21,9 +21,13 @@ export default defineConfig({
   workers: 1,
   retries: 0,
   timeout: 60_000,
+  // A locator that finds nothing says so soon, not only when the whole test has run out of time.
+  expect: { timeout: 10_000 },
   forbidOnly: Boolean(process.env.CI),
   reporter: [["list"], ["json", { outputFile: process.env.E2E_REPORT ?? ".test/reports/e2e.json" }]],
   use: {
+    actionTimeout: 15_000,
+    navigationTimeout: 30_000,
     baseURL: process.env.APP_URL ?? "http://localhost:4000",
     browserName: "chromium",
     locale: "en-US",
