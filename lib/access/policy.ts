@@ -50,7 +50,7 @@ export const AREAS = {
   prep: ["owner", "contractor", "inspector", "desk", "receiver"],
   findings: ["owner", "contractor", "inspector", "desk", "receiver"],
   fees: ["owner", "billing", "payer"],
-  movement: ["owner", "contractor", "inspector", "billing", "desk", "receiver", "carrier", "payer"],
+  movement: ["owner", "contractor", "inspector", "desk", "receiver"],
   timeline: ["owner", "contractor", "inspector", "billing", "desk", "receiver", "carrier", "payer"],
 } as const satisfies Record<string, readonly Part[]>;
 export type Area = keyof typeof AREAS;

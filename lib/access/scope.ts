@@ -13,13 +13,7 @@ const companyIds = (viewer: Viewer) => viewer.memberships.map((one) => one.compa
 export const heldSeat = (viewer: Viewer) =>
   and(
     isNull(moveSeats.removedAt),
-    or(
-      inArray(moveSeats.companyId, companyIds(viewer)),
-      exists(
-        db().select({ one: sql`1` }).from(seatPeople)
-          .where(and(eq(seatPeople.seatId, moveSeats.id), eq(seatPeople.userId, viewer.userId), isNull(seatPeople.removedAt))),
-      ),
-    ),
+    or(inArray(moveSeats.companyId, companyIds(viewer)), inArray(moveSeats.id, viewer.guestSeatIds)),
   );
 
 /** The one condition that decides which moves a person can see; for a query that selects from or joins `moves`. */

@@ -15,7 +15,9 @@ import type { Attempt, Viewer } from "@/lib/viewer/types";
 import { unsafeGatherFacts } from "./queries";
 import { standingOf } from "./rules";
 
-const RETRY = new Set([1213, 1020, 1205]);
+const RETRY = new Set([1213, 1020]);
+/** Waiting for a row took too long; trying again would only let the person wait longer. */
+const WAITED_TOO_LONG = 1205;
 const DUPLICATE = 1062;
 const MAX_TRIES = 4;
 
@@ -42,8 +44,9 @@ export async function write<T>(viewer: Pick<Viewer, "userId">, attempt: Attempt,
       });
     } catch (error) {
       if (error instanceof Replay) return replay<T>(viewer.userId, attempt);
-      if (!RETRY.has(unsafeErrno(error) ?? 0)) throw error;
-      if (tries === MAX_TRIES) throw new AppError("busy", "Somebody else is writing to the same case. Nothing was saved; try again.", { cause: error, retryAfterSeconds: 2 });
+      const errno = unsafeErrno(error) ?? 0;
+      if (errno !== WAITED_TOO_LONG && !RETRY.has(errno)) throw error;
+      if (errno === WAITED_TOO_LONG || tries === MAX_TRIES) throw new AppError("busy", "Somebody else is writing to the same case. Nothing was saved; try again.", { cause: error, retryAfterSeconds: 2 });
       await new Promise((resolve) => setTimeout(resolve, tries * 20 + (process.hrtime()[1] % 30)));
     }
   }

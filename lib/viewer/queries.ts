@@ -1,7 +1,7 @@
 import "server-only";
 import { and, eq, isNull, sql } from "drizzle-orm";
 import { db, type Reader } from "@/db/client";
-import { companies, companyMembers, users } from "@/db/schema";
+import { companies, companyMembers, seatPeople, users } from "@/db/schema";
 import type { Viewer } from "./types";
 
 /** No viewer yet: this makes one. Null when the account is gone or disabled. */
@@ -14,7 +14,8 @@ export async function unsafeViewerOf(userId: string, sessionId: string | null, r
     .from(companyMembers).innerJoin(companies, and(eq(companies.id, companyMembers.companyId), isNull(companies.mergedIntoId)))
     .where(and(eq(companyMembers.userId, userId), isNull(companyMembers.removedAt), sql`${companyMembers.admittedAt} is not null`))
     .orderBy(companies.name);
-  return { ...user, sessionId, memberships };
+  const guestSeats = await reader.select({ seatId: seatPeople.seatId }).from(seatPeople).where(and(eq(seatPeople.userId, userId), isNull(seatPeople.removedAt)));
+  return { ...user, sessionId, memberships, guestSeatIds: guestSeats.map((one) => one.seatId) };
 }
 
 /** No viewer: asked before a session begins, whatever way in was taken. */

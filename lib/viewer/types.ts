@@ -10,6 +10,8 @@ export type Viewer = {
   siteAdmin: boolean;
   sessionId: string | null;
   memberships: Membership[];
+  /** Seats that the viewer was invited to alone, in companies that have not admitted them. */
+  guestSeatIds: string[];
 };
 
 /** One try of a write: the same key twice gets the first answer. */

@@ -39,7 +39,7 @@ const SEES: Record<Area, string> = {
   prep: "owner contractor inspector desk receiver",
   findings: "owner contractor inspector desk receiver",
   fees: "owner billing payer",
-  movement: "owner contractor inspector billing desk receiver carrier payer",
+  movement: "owner contractor inspector desk receiver",
   timeline: "owner contractor inspector billing desk receiver carrier payer",
 };
 

@@ -68,7 +68,8 @@ async function copyOf(first: Case): Promise<Case> {
   const alone = seats.find(({ part, legId }) => part === "carrier" && legId === legA);
   await db().insert(seatPeople).values({ seatId: alone?.id ?? "", userId: first.people.guest.userId, inspects: true, joinedAt: new Date() });
   await db().insert(prepItems).values((await db().select().from(prepItems).where(eq(prepItems.moveId, first.moveId))).map((item) => ({ ...item, moveId, id: newId("prep") })));
-  return { ...first, moveId, legA, legB };
+  const guest = { ...first.people.guest, guestSeatIds: [...first.people.guest.guestSeatIds, alone?.id ?? ""] };
+  return { ...first, people: { ...first.people, guest }, moveId, legA, legB };
 }
 
 let first: Promise<Case> | undefined;

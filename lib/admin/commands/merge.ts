@@ -15,6 +15,8 @@ type Pair = { keepId: string; goneId: string };
 /** Makes one company of two: people, seats, legs, drafts and letters of the one that goes pass to the one that is kept. What was signed, quoted and recorded keeps the name under which it happened. */
 export async function mergeCompanies(viewer: Viewer, pair: MergeCompanies, attempt: Attempt) {
   requireSiteAdmin(viewer);
+  // Merging a company of one's own would open the other one's cases to oneself.
+  if (viewer.memberships.some(({ companyId }) => companyId === pair.keepId || companyId === pair.goneId)) throw new AppError("not_your_part", "You belong to one of these companies. Another administrator merges them.");
   return write(viewer, attempt, async (tx) => {
     // Moves first, as every other write does, then companies; each in the order of ids, so that two merges never wait for each other.
     const moveIds = await movesOf(tx, pair);

@@ -2,7 +2,7 @@ import { closeMove, giveInstruction, makeSighting, recordArrival, releaseUnit, r
 import { getMovement } from "@/lib/movement/queries";
 import { anAttempt } from "../../support/factories";
 import { carrierSteps, query, step } from "../build";
-import { SEATED } from "../personas";
+import { SEE_WORK } from "../personas";
 import type { Case } from "../scenario";
 import { arrived, atDestination, fit, instructed, photographed, placed, readyToGo, sighted } from "../steps";
 
@@ -16,7 +16,7 @@ const bothPictured = async (of: Case) => {
 };
 
 export const movementRows = [
-  query({ name: "getMovement", right: SEATED, run: (viewer, { moveId }) => getMovement(viewer, moveId) }),
+  query({ name: "getMovement", right: SEE_WORK, run: (viewer, { moveId }) => getMovement(viewer, moveId) }),
   ...carrierSteps({
     name: "giveInstruction", ...desk, seed: async (of) => { await fit(of, of.legA); return {}; },
     run: (viewer, { moveId, legA }, enteredFor) => giveInstruction(viewer, { moveId, legId: legA, billNumber: "B-4410", clearanceNumber: null, train: null, pickupFrom: null, text: null, enteredFor }, anAttempt()),
