@@ -38,7 +38,7 @@ function NamePart({ name, email }: { name: string; email: string }) {
         <FormErrors errors={rename.faults.list} />
         {rename.done && typed === name && <Notice kind="done" live="status">The name is changed. What you signed before keeps the name it was signed with.</Notice>}
         <TextField name="name" label="Your name" autoComplete="name" required value={typed} onChange={(event) => setTyped(event.target.value)} error={rename.faults.field("name")} />
-        <TextField name="own-email" label="E-mail address" value={email} readOnly hint="It is how others invite you. To change it, ask a site administrator." />
+        <TextField name="own-email" label="E-mail address" value={email} readOnly hint="It is how others invite you, and stays with this account. For another address, be invited there or sign up anew." />
         <div><Button type="submit" busy={rename.busy} aria-disabled={typed === name}>Save the name</Button></div>
       </form>
     </Sheet>
