@@ -23,6 +23,7 @@ export async function handleForm<S extends z.ZodType>(schema: S, data: FormData,
   } catch (error) {
     unstable_rethrow(error);
     const { title: message, fields = {} } = tell(error);
-    return { message, fields, values };
+    // Spread, since what goes to the browser from here must have a prototype, and the faults of fields come without.
+    return { message, fields: { ...fields }, values };
   }
 }
