@@ -73,7 +73,7 @@ export async function postFinding(viewer: Viewer, input: PostFinding, attempt: A
 async function liftBecauseOf(ctx: MoveWrite, leg: Leg, label: string): Promise<boolean> {
   const standing = await findStandingAcceptance(ctx, leg.id);
   if (!standing) return false;
-  const { legs: facts } = await unsafeGatherFacts(ctx.tx, ctx.move.id);
+  const { legs: facts } = await unsafeGatherFacts(ctx.tx, ctx.move.id, ctx.at);
   if (facts.find((one) => one.legId === leg.id)?.takenOver) return false;
   await liftAcceptance(ctx, standing, leg.carrierName, `${label} posted after`, null);
   return true;
