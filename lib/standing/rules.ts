@@ -70,9 +70,11 @@ function legNeeds(move: MoveFacts, leg: LegFacts): WaitingOn | null {
   const owner = (waitingFor: Wait): WaitingOn => ({ part: "owner", legId: leg.legId, companyId: move.ownerCompanyId, name: move.ownerName, waitingFor, count: null });
   const payer = (waitingFor: Wait): WaitingOn => ({ part: "payer", legId: leg.legId, companyId: leg.payerCompanyId, name: leg.payerName ?? move.ownerName, waitingFor, count: null });
   const contractor = (waitingFor: Wait, count: number | null): WaitingOn => ({ part: "contractor", legId: leg.legId, companyId: move.contractor?.companyId ?? null, name: move.contractor?.name ?? "Contractor", waitingFor, count });
-  if (!leg.payerName) return owner("name-payer");
-  if (leg.openFindings > 0) return contractor("answer", leg.openFindings);
-  if (leg.answeredFindings > 0) return ofCarrier(leg, "inspector", "look-at-answers", leg.answeredFindings);
+  // Once billing is cleared nobody has to be named any more, and nobody can be.
+  if (!leg.payerName && !leg.billingCleared) return owner("name-payer");
+  if (leg.openFindings > 0) return move.contractor ? contractor("answer", leg.openFindings) : owner("invite-contractor");
+  // An answer is enough for pickup; after the acceptance nothing waits for somebody to look at it.
+  if (leg.answeredFindings > 0 && !leg.accepted) return ofCarrier(leg, "inspector", "look-at-answers", leg.answeredFindings);
   if (!leg.accepted) return ofCarrier(leg, "inspector", leg.visits === 0 ? "inspect" : "accept");
   if (!leg.billingCleared) {
     if (!leg.payerCompanyId) return owner("invite-payer");
@@ -87,10 +89,10 @@ function legNeeds(move: MoveFacts, leg: LegFacts): WaitingOn | null {
 function waitingFor(move: MoveFacts): WaitingOn | null {
   const owner = (what: Wait, legId: string | null = null): WaitingOn => ({ part: "owner", legId, companyId: move.ownerCompanyId, name: move.ownerName, waitingFor: what, count: null });
   if (move.state !== "open") return null;
-  if (!move.contractor) return owner("invite-contractor");
   const contractor = (what: Wait, count: number | null = null): WaitingOn => ({ part: "contractor", legId: null, companyId: move.contractor?.companyId ?? null, name: move.contractor?.name ?? "Contractor", waitingFor: what, count });
   const next = current(move);
   const riding = onWay(move);
+  if (!move.contractor && !riding) return owner("invite-contractor");
   if (!move.standing.signed && !riding) return move.standing.left > 0 ? contractor("prepare", move.standing.left) : contractor("sign-prep");
   if (next && (!riding || riding.delivered)) {
     const needs = legNeeds(move, next);
