@@ -1,5 +1,7 @@
 import { NextResponse, type NextRequest } from "next/server";
+import { methodsOf } from "@/lib/doors";
 import { env } from "@/lib/env";
+import { routes } from "@/lib/routes";
 
 /** Hosts of the file service, which the browser sends photos to and is redirected to for reading them. */
 function fileHosts(): string {
@@ -30,28 +32,48 @@ function policyWith(nonce: string): string {
 
 const PRIVATE_LINK = /^\/(join|follow|enter|verify|reset|confirm)\//;
 
-/** Sets headers only; who may see what is decided where the data is read. */
+const API_POLICY = "default-src 'none'; frame-ancestors 'none'; sandbox";
+const METHODS: readonly string[] = ["GET", "HEAD", "POST", "PUT", "DELETE", "OPTIONS"];
+
+function setHeaders({ headers }: NextResponse, pathname: string, policy: string): void {
+  headers.set("content-security-policy", policy);
+  headers.set("x-content-type-options", "nosniff");
+  headers.set("x-frame-options", "DENY");
+  // The path of a private link is its secret. Not `no-referrer`: with it a browser sends the page's own form with the origin "null".
+  headers.set("referrer-policy", PRIVATE_LINK.test(pathname) ? "strict-origin" : "same-origin");
+  headers.set("cross-origin-opener-policy", "same-origin");
+  headers.set("cross-origin-resource-policy", "same-origin");
+  headers.set("permissions-policy", "camera=(self), geolocation=(), microphone=(), payment=(), usb=()");
+  if (env().APP_URL.startsWith("https://")) headers.set("strict-transport-security", "max-age=63072000; includeSubDomains");
+}
+
+/** A problem document (RFC 9457) where no door is, or none for this method; null where there is one. The framework would answer with a page, or with nothing. */
+function noSuchDoor(pathname: string, method: string): NextResponse | null {
+  const known = methodsOf(pathname);
+  const allowed = known && ["OPTIONS", ...(known.includes("GET") ? ["HEAD"] : []), ...known];
+  if (allowed?.includes(method)) return null;
+  const [code, status, title] = allowed ? ["no-such-method", 405, `This takes ${allowed.join(", ")}.`] as const : ["not-found", 404, "There is nothing at this address."] as const;
+  const headers = { "content-type": "application/problem+json; charset=utf-8", "cache-control": "no-store", ...(allowed && { allow: allowed.join(", ") }) };
+  return new NextResponse(JSON.stringify({ type: routes.problems(code), status, title, instance: `urn:uuid:${crypto.randomUUID()}` }), { status, headers });
+}
+
+/** Sets headers, and turns away what is addressed to no door; who may see what is decided where the data is read. */
 export function proxy(request: NextRequest) {
-  if (!["GET", "HEAD", "POST", "PUT", "DELETE", "OPTIONS"].includes(request.method)) return new NextResponse(null, { status: 405 });
+  const { pathname, search } = request.nextUrl;
+  if (pathname.startsWith("/api/")) {
+    const response = noSuchDoor(pathname, request.method) ?? NextResponse.next();
+    setHeaders(response, pathname, API_POLICY);
+    return response;
+  }
   const nonce = Buffer.from(crypto.getRandomValues(new Uint8Array(16))).toString("base64");
   const policy = policyWith(nonce);
-  const { pathname, search } = request.nextUrl;
   const headers = new Headers(request.headers);
   headers.set("x-nonce", nonce);
   headers.set("content-security-policy", policy);
   headers.set("x-path", pathname + search);
-  const response = NextResponse.next({ request: { headers } });
-  const isApi = pathname.startsWith("/api/");
-  response.headers.set("content-security-policy", isApi ? "default-src 'none'; frame-ancestors 'none'; sandbox" : policy);
-  response.headers.set("x-content-type-options", "nosniff");
-  response.headers.set("x-frame-options", "DENY");
-  // The path of a private link is its secret. Not `no-referrer`: with it a browser sends the page's own form with the origin "null".
-  response.headers.set("referrer-policy", PRIVATE_LINK.test(pathname) ? "strict-origin" : "same-origin");
-  response.headers.set("cross-origin-opener-policy", "same-origin");
-  response.headers.set("cross-origin-resource-policy", "same-origin");
-  response.headers.set("permissions-policy", "camera=(self), geolocation=(), microphone=(), payment=(), usb=()");
-  if (!isApi) response.headers.set("cache-control", "private, no-store");
-  if (env().APP_URL.startsWith("https://")) response.headers.set("strict-transport-security", "max-age=63072000; includeSubDomains");
+  const response = METHODS.includes(request.method) ? NextResponse.next({ request: { headers } }) : new NextResponse(null, { status: 405, headers: { allow: METHODS.join(", ") } });
+  setHeaders(response, pathname, policy);
+  response.headers.set("cache-control", "private, no-store");
   return response;
 }
 

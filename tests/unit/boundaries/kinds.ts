@@ -49,7 +49,7 @@ const NOT_FOR_SERVICES = /^(?!drizzle|mysql2|better-auth|next\/(?:image|og)$)/;
 export const KINDS: readonly Kind[] = [
   { kind: "test", file: /^tests\//, packages: ANY, own: ANY },
   { kind: "configuration", file: /^[a-z]+\.config\.ts$|^next-env\.d\.ts$/, packages: ANY, own: only("\\.next/.+", "components/ui/palette") },
-  { kind: "proxy", file: /^proxy\.ts$/, packages: only("next/server", "better-auth/cookies"), own: only("lib/(?:env|routes|errors)") },
+  { kind: "proxy", file: /^proxy\.ts$/, packages: only("next/server", "better-auth/cookies"), own: only("lib/(?:env|routes|errors|doors)") },
 
   { kind: "table", file: /^db\/schema\//, packages: /^drizzle-orm/, own: only("db/schema/.+", "db/columns", "lib/[a-z-]+/vocabulary"), types: only("lib/[a-z-]+/types") },
   { kind: "database", file: /^db\//, packages: /^(?:drizzle-orm|mysql2|server-only$)/, own: only("db/.+", "lib/env") },

@@ -10,7 +10,10 @@ import { loadCase } from "./load-case";
 type Props = { params: Promise<{ moveId: string }>; children: ReactNode };
 
 export async function generateMetadata({ params }: Omit<Props, "children">): Promise<Metadata> {
-  const { unit } = await loadCase((await params).moveId);
+  // The page below says that it can't be shown; thrown from here it would come without any title.
+  const file = await loadCase((await params).moveId).catch(() => null);
+  if (!file) return { title: "Nothing here" };
+  const { unit } = file;
   const name = `${unit.mark} ${unit.number}`;
   return { title: { default: `${name} · Towfolio`, template: `%s · ${name} · Towfolio` } };
 }

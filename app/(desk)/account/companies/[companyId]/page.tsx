@@ -10,7 +10,9 @@ type Props = { params: Promise<{ companyId: string }> };
 const loadCompany = cache((companyId: string) => load((viewer) => getCompany(viewer, companyId)));
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
-  return { title: (await loadCompany((await params).companyId)).name };
+  // The page below says that it can't be shown; thrown from here it would come without any title.
+  const company = await loadCompany((await params).companyId).catch(() => null);
+  return { title: company?.name ?? "Nothing here" };
 }
 
 export default async function CompanyPage({ params }: Props) {
