@@ -9,7 +9,7 @@ import { PHOTOS_PER_SUBJECT } from "@/lib/evidence/vocabulary";
 import { wordsOfPhoto } from "@/lib/evidence/words";
 import { EarlierPhotos } from "./earlier-photos";
 import { EntryRow, EntryState } from "./entry-row";
-import { pageQueue, useEntries } from "./page-queue";
+import { loadSender, pageQueue, useEntries } from "./page-queue";
 import { Thumbnail } from "./thumbnail";
 
 export type PhotoFieldProps = {
@@ -31,6 +31,9 @@ export function PhotoField({ moveId, label, hint, value, onChange, error }: Phot
   const entries = useEntries();
   const [over, setOver] = useState(false);
   const own = entries.filter((entry) => entry.field === id);
+
+  // While there is a signal: in a yard it may be gone by the time the photo is taken.
+  useEffect(() => void loadSender().catch(() => undefined), []);
 
   // The queue is outside of React: what has become usable there is handed to the form here, once.
   useEffect(() => {

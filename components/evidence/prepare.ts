@@ -1,14 +1,10 @@
 import { BROKEN_WORDS, faultOfFile, HEIC_WORDS } from "@/lib/evidence/rules";
 import { sizeOf, sniffType, type Size } from "@/lib/evidence/sniff";
 import { PROOF_MAX_BYTES, PROOF_MAX_SIDE_PX, type PhotoType } from "@/lib/evidence/vocabulary";
+import { PhotoFault } from "./send-order";
 
 /** A photo that is ready to be sent: its bytes, what they are, their hash, and the small proof that goes first. */
 export type Prepared = Size & { name: string; type: PhotoType; original: Blob; sizeBytes: number; sha256: string; proof: Blob };
-
-/** A file that can't be taken, said in words for the person who chose it. */
-export class PhotoFault extends Error {
-  override name = "PhotoFault";
-}
 
 // A picture's size stands behind its EXIF, which can fill some segments of 64 KB.
 const HEAD_BYTES = 1024 * 1024;

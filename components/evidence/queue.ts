@@ -3,8 +3,8 @@ import type { AnnouncePhoto } from "@/lib/evidence/input";
 import type { Announced, PhotoView, Slot } from "@/lib/evidence/types";
 import { retrySeconds, type Sending } from "@/lib/evidence/words";
 import type { PhoneStore, Unsent } from "./phone-store";
-import { PhotoFault, type Prepared } from "./prepare";
-import { NotReported, SendRefused, type SendOrder } from "./send-file";
+import type { Prepared } from "./prepare";
+import { NotReported, PhotoFault, SendRefused, type SendOrder } from "./send-order";
 
 /** One photo on its way, as a screen shows it. A new object for every change. */
 export type Entry = Sending & {

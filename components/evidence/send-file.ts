@@ -1,33 +1,10 @@
 import { generateReactHelpers } from "@uploadthing/react";
-import type { Slot } from "@/lib/evidence/types";
 import { routes } from "@/lib/routes";
 import type { UploadRouter } from "@/lib/uploads/router";
-import type { SendAddress } from "./phone-store";
-
-export type SendOrder = {
-  photoId: string;
-  slot: Slot;
-  file: File;
-  /** From an earlier try that broke off. */
-  address: SendAddress | null;
-  /** A new address came, or null: the old one is of no use any more. */
-  onAddress: (address: SendAddress | null) => void;
-  onPercent: (percent: number) => void;
-  signal: AbortSignal;
-};
+import { SendRefused, type SendOrder } from "./send-order";
 
 /** The file service takes a file at one address for an hour; a few minutes are left for the last piece. */
 const ADDRESS_GOOD_MS = 50 * 60_000;
-
-/** What the service or our server said against a file, in contrast to a line that broke. */
-export class SendRefused extends Error {
-  override name = "SendRefused";
-}
-
-/** A file went out whole, and the server has not heard of it. */
-export class NotReported extends Error {
-  override name = "NotReported";
-}
 
 const OUR_CODES = new Set(["BAD_REQUEST", "NOT_FOUND", "FORBIDDEN", "INTERNAL_SERVER_ERROR"]);
 

@@ -1,7 +1,7 @@
 "use client";
 
 import { useQuery } from "@tanstack/react-query";
-import { useState } from "react";
+import { useEffect, useState } from "react";
 import { FieldBar } from "@/components/shell/top-bar";
 import { ActionBar } from "@/components/ui/action-bar";
 import { Button } from "@/components/ui/button";
@@ -11,9 +11,8 @@ import type { FindingAct } from "@/lib/findings/rules";
 import type { FindingDetail } from "@/lib/findings/types";
 import { formatWhen } from "@/lib/moves/when";
 import { routes } from "@/lib/routes";
-import { AnswerForm } from "./answer-form";
 import { FindingHead, FoundPart } from "./finding-head";
-import { ReplyForm } from "./reply-form";
+import { AnswerForm, loadForms, ReplyForm } from "./forms";
 import { Thread } from "./thread";
 
 // Kept outside of the component, so that it runs when the form comes and not with every letter typed.
@@ -25,6 +24,7 @@ export type FindingSheetProps = { first: FindingDetail; userId: string };
 export function FindingSheet({ first, userId }: FindingSheetProps) {
   const { data: finding, isError } = useQuery({ ...findingOptions(first.moveId, first.id), initialData: first });
   const [doing, setDoing] = useState<FindingAct | null>(null);
+  useEffect(() => void loadForms().catch(() => undefined), []);
   const unit = `${finding.unit.mark} ${finding.unit.number}`;
   const onDone = () => setDoing(null);
   return (

@@ -4,9 +4,8 @@ import { Button } from "@/components/ui/button";
 import type { InstructionView, MovementLeg } from "@/lib/movement/types";
 import { formatDay, formatWhen } from "@/lib/moves/when";
 import { SaidBy } from "./entered-note";
-import { InstructionForm } from "./instruction-form";
+import { InstructionForm, WithdrawForm } from "./forms";
 import type { FormSwitch } from "./open-form";
-import { WithdrawForm } from "./withdraw-form";
 
 const facts = ({ billNumber, clearanceNumber, train, pickupFrom }: InstructionView) =>
   [

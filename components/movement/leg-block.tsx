@@ -7,10 +7,10 @@ import type { Tone } from "@/components/ui/tone";
 import { legNotes } from "@/lib/movement/notes";
 import type { Movement, MovementLeg } from "@/lib/movement/types";
 import { Conditions } from "./conditions";
+import { SightingForm } from "./forms";
 import { Instruction } from "./instruction";
 import type { FormSwitch } from "./open-form";
 import { Release } from "./release";
-import { SightingForm } from "./sighting-form";
 import { SightingLine } from "./sighting-line";
 
 type Props = { moveId: string; movement: Movement; leg: MovementLeg; current: boolean; switcher: FormSwitch };

@@ -1,15 +1,15 @@
 "use client";
 
 import { useQuery } from "@tanstack/react-query";
-import { useState } from "react";
+import { useEffect, useState } from "react";
 import { Button } from "@/components/ui/button";
 import { Sheet } from "@/components/ui/sheet";
 import { formatWhen } from "@/lib/moves/when";
 import { movementOptions } from "@/lib/movement/options";
 import type { Movement } from "@/lib/movement/types";
-import { ArrivalForm } from "./arrival-form";
 import { ArrivalSigned } from "./arrival-view";
 import { Closing } from "./closing";
+import { ArrivalForm, loadForms } from "./forms";
 import { LegBlock } from "./leg-block";
 import { homeOf, type FormSwitch, type OpenForm } from "./open-form";
 
@@ -27,6 +27,7 @@ function Arrival({ moveId, movement, switcher }: { moveId: string; movement: Mov
 export function MovementTab({ moveId }: { moveId: string }) {
   const { data: movement, isError } = useQuery(movementOptions(moveId));
   const [open, setOpen] = useState<OpenForm | null>(null);
+  useEffect(() => void loadForms().catch(() => undefined), []);
   if (!movement) return null;
   const show = (form: OpenForm | null) => {
     if (!form && open) document.getElementById(homeOf(open))?.focus({ preventScroll: true });

@@ -3,8 +3,8 @@
 import { Button } from "@/components/ui/button";
 import type { MovementLeg } from "@/lib/movement/types";
 import { formatWhen } from "@/lib/moves/when";
+import { ReleaseDialog } from "./forms";
 import type { FormSwitch } from "./open-form";
-import { ReleaseDialog } from "./release-dialog";
 
 const BEFORE: readonly string[] = ["prep", "acceptance", "billing", "instruction"];
 

@@ -6,9 +6,8 @@ import { EVENT_CODES, eventCodeText } from "@/lib/movement/event-codes";
 import type { Movement, MovementLeg, SightingView } from "@/lib/movement/types";
 import { formatWhen, daysBetween } from "@/lib/moves/when";
 import { SaidBy } from "./entered-note";
+import { RetractForm, SightingForm } from "./forms";
 import type { FormSwitch } from "./open-form";
-import { RetractForm } from "./retract-form";
-import { SightingForm } from "./sighting-form";
 
 type Props = { moveId: string; leg: MovementLeg; sighting: SightingView; destination: Movement["destination"]; switcher: FormSwitch };
 

@@ -1,7 +1,7 @@
 "use client";
 
 import { clsx } from "clsx";
-import { useEffect, useId, useRef, type ReactNode } from "react";
+import { useEffect, useId, useLayoutEffect, useRef, type ReactNode } from "react";
 
 export type DialogProps = {
   open: boolean;
@@ -26,6 +26,11 @@ export function Dialog({ open, onClose, title, children, actions, wide = false }
     if (open) element.showModal();
     else element.close();
   }, [open]);
+  // Closing gives the focus back; taking an open dialog out of the page does not.
+  useLayoutEffect(() => {
+    const element = dialog.current;
+    return () => element?.close();
+  }, []);
 
   return (
     <dialog

@@ -17,18 +17,8 @@ type Ends = { origin: PlaceForm; destination: PlaceForm; wantedFrom: string; wan
 
 const EXAMPLES = { name: "Shop, yard, siding or customer track.", place: "As a railroad timetable names it." };
 
-/** Where the move begins and ends, its wanted days and its note; the owner’s to change. */
-export function EndsEditor({ file }: { file: CaseFile }) {
-  const [open, setOpen] = useState(false);
-  if (open) return <EndsForm file={file} onDone={() => setOpen(false)} />;
-  return (
-    <Button variant="ghost" size="small" className="mt-4" onClick={() => setOpen(true)}>
-      Change the ends, the wanted days or the note
-    </Button>
-  );
-}
-
-function EndsForm({ file: current, onDone }: { file: CaseFile; onDone: () => void }) {
+/** What the owner changes of the ends of the move. */
+export function EndsForm({ file: current, onDone }: { file: CaseFile; onDone: () => void }) {
   const client = useQueryClient();
   // As it was when the form was opened; the case goes on being read behind it, and a change there must not pass for seen.
   const [file, setFile] = useState(current);

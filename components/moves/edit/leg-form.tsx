@@ -7,7 +7,7 @@ import { TextField } from "@/components/ui/text-field";
 import { CallError } from "@/lib/entry/fetcher";
 import { type PayerChoice } from "@/lib/moves/draft";
 import { caseOptions, editLegMutation, moveKeys } from "@/lib/moves/options";
-import type { CaseFile, CaseLeg } from "@/lib/moves/types";
+import type { CaseLeg } from "@/lib/moves/types";
 import { PayerFields } from "../payer-fields";
 import { useAttemptKey } from "../use-attempt-key";
 import { ZoneField } from "../zone-field";
@@ -23,7 +23,8 @@ const valuesOf = (leg: CaseLeg, ownerName: string): LegValues => ({
 
 type LegFormProps = { moveId: string; leg: CaseLeg; last: boolean; ownerName: string; onDone: () => void };
 
-function LegForm({ moveId, leg: current, last, ownerName, onDone }: LegFormProps) {
+/** What the owner changes of a leg. */
+export function LegForm({ moveId, leg: current, last, ownerName, onDone }: LegFormProps) {
   const client = useQueryClient();
   // As it was when the form was opened; the case goes on being read behind it, and a change there must not pass for seen.
   const [leg, setLeg] = useState(current);
@@ -75,36 +76,5 @@ function LegForm({ moveId, leg: current, last, ownerName, onDone }: LegFormProps
         </Button>
       </div>
     </form>
-  );
-}
-
-const payerWords = ({ payerName }: CaseLeg) => (payerName ? `paid by ${payerName}` : "nobody is named as payer yet");
-
-/** One leg of the route with its payer; the owner changes what has not begun. */
-export function LegEditor({ file, leg }: { file: CaseFile; leg: CaseLeg }) {
-  const editable = file.may.editLegs && !(leg.fixedBecause && leg.payerFixedBecause);
-  const [open, setOpen] = useState(editable && leg.payerName === null);
-  return (
-    <section id={`edit-${leg.legId}`} aria-labelledby={`edit-${leg.legId}-title`} className="border-b border-rule py-4 last:border-b-0">
-      <div className="flex flex-wrap items-start justify-between gap-3">
-        <div>
-          <h3 id={`edit-${leg.legId}-title`} className="text-15 font-[680]">
-            Leg {leg.seq}: {leg.carrierName}
-            {leg.carrierMark && ` (${leg.carrierMark})`}
-          </h3>
-          <p className="text-14 text-ink-2">
-            {leg.fromPlace} to {leg.toPlace}
-            {leg.miles !== null && `, ${leg.miles.toLocaleString("en-US")} mi`}; {payerWords(leg)}
-          </p>
-          {file.may.editLegs && leg.fixedBecause && <p className="mt-1 text-14 text-ink-2">{leg.fixedBecause}</p>}
-        </div>
-        {editable && !open && (
-          <Button variant="ghost" size="small" onClick={() => setOpen(true)}>
-            Change<span className="sr-only"> leg {leg.seq}</span>
-          </Button>
-        )}
-      </div>
-      {editable && open && <LegForm moveId={file.moveId} leg={leg} last={leg.seq === file.legs.length} ownerName={file.ownerName} onDone={() => setOpen(false)} />}
-    </section>
   );
 }

@@ -1,17 +1,20 @@
 "use client";
 
 import { useQuery } from "@tanstack/react-query";
+import { useEffect } from "react";
 import { Sheet } from "@/components/ui/sheet";
 import { caseOptions } from "@/lib/moves/options";
 import { CancelMove } from "./cancel-move";
-import { EndsEditor } from "./ends-form";
+import { EndsEditor } from "./ends-editor";
 import { EquipmentFacts } from "./equipment-facts";
 import { EquipmentForm } from "./equipment-form";
-import { LegEditor } from "./leg-form";
+import { loadForms } from "./forms";
+import { LegEditor } from "./leg-editor";
 
 /** The unit as an inspector lists it, and the route with its payers; for owner and contractor to change, for others to read. */
 export function UnitAndRoute({ moveId }: { moveId: string }) {
   const { data: file } = useQuery(caseOptions(moveId));
+  useEffect(() => void loadForms().catch(() => undefined), []);
   if (!file) return null;
   return (
     <>

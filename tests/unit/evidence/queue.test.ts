@@ -1,8 +1,8 @@
 import { describe, expect, it } from "vitest";
 import { UploadQueue, type QueueParts } from "@/components/evidence/queue";
 import type { Unsent } from "@/components/evidence/phone-store";
-import { PhotoFault, type Prepared } from "@/components/evidence/prepare";
-import type { SendOrder } from "@/components/evidence/send-file";
+import type { Prepared } from "@/components/evidence/prepare";
+import { PhotoFault, type SendOrder } from "@/components/evidence/send-order";
 import { CallError } from "@/lib/entry/fetcher";
 import type { Announced, PhotoView } from "@/lib/evidence/types";
 

@@ -1,7 +1,8 @@
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
 import { render, screen, waitFor, within } from "@testing-library/react";
 import userEvent from "@testing-library/user-event";
-import { afterEach, beforeEach, expect, it, vi } from "vitest";
+import { afterEach, beforeAll, beforeEach, expect, it, vi } from "vitest";
+import { loadForms } from "@/components/movement/forms";
 import { MovementTab } from "@/components/movement/movement-tab";
 import { movementOptions } from "@/lib/movement/options";
 import type { Movement, MovementLeg, SightingView } from "@/lib/movement/types";
@@ -28,6 +29,8 @@ type Sent = { path: string; body: Record<string, unknown>; key: string | null };
 let sent: Sent[] = [];
 let answers: Response[] = [];
 let shown: Movement | null = null;
+
+beforeAll(loadForms);
 
 beforeEach(() => {
   sent = [];
