@@ -36,7 +36,7 @@ export const GRANTS: Record<string, Grant[]> = {
   findings: ["SELECT", "INSERT", "UPDATE(state, rounds, version)"],
   finding_entries: APPEND,
   acceptances: ["SELECT", "INSERT", "UPDATE(withdrawn_at, withdrawn_why)"],
-  quotes: ["SELECT", "INSERT", "UPDATE(state, agreed_by, agreed_at, voided_at, voided_why, version)"],
+  quotes: ["SELECT", "INSERT", "UPDATE(state, payer_company_id, agreed_by, agreed_at, voided_at, voided_why, version)"],
   fee_lines: APPEND,
   payments: READ_WRITE,
   payment_events: APPEND,

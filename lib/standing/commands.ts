@@ -1,7 +1,7 @@
 import "server-only";
-import { and, eq, isNull, sql } from "drizzle-orm";
+import { and, eq, inArray, isNull, lte, or, sql } from "drizzle-orm";
 import { db, type Tx } from "@/db/client";
-import { acceptances, attempts, companies, companyMembers, legs, moves, moveSeats, seatPeople, users, waits } from "@/db/schema";
+import { acceptances, attempts, companies, companyMembers, legs, moves, moveSeats, quotes, seatPeople, users, waits } from "@/db/schema";
 import { denyAction, partFor, type Action, type Doing } from "@/lib/access/policy";
 import { lockMove, type SeenMove } from "@/lib/access/scope";
 import type { EnteredFor, HeldPart } from "@/lib/access/types";
@@ -12,6 +12,7 @@ import { putMail } from "@/lib/outbox/commands";
 import type { CaseNews, MailPayloads } from "@/lib/outbox/types";
 import { appendRecord, type NewEntry, type Speaker } from "@/lib/record/commands";
 import type { Attempt, Viewer } from "@/lib/viewer/types";
+import { dayThere } from "./day";
 import { unsafeGatherFacts } from "./queries";
 import { standingOf } from "./rules";
 
@@ -150,11 +151,12 @@ export async function refreshStanding(tx: Tx, moveId: string, at: Date): Promise
   if (waiting) await tx.insert(waits).values({ id: newId("wait"), moveId, part: waiting.part, legId: waiting.legId, name: waiting.name, waitingFor: waiting.waitingFor, since: at });
 }
 
-/** No viewer: a day that has passed changes whose turn it is without anybody writing. Looks at open moves with an acceptance whose last day lies behind. */
+/** No viewer: a day that has passed changes whose turn it is without anybody writing. Looks at open moves with an acceptance or a quote whose last day lies behind. */
 export async function unsafeRefreshLapsed(now: Date): Promise<void> {
   const yesterday = new Date(now.getTime() - 86_400_000).toISOString().slice(0, 10);
-  const rows = await db().selectDistinct({ moveId: acceptances.moveId }).from(acceptances).innerJoin(moves, eq(moves.id, acceptances.moveId))
-    .where(and(eq(moves.state, "open"), isNull(acceptances.withdrawnAt), sql`${acceptances.validUntil} <= ${yesterday}`));
+  const accepted = db().select({ moveId: acceptances.moveId }).from(acceptances).where(and(isNull(acceptances.withdrawnAt), lte(acceptances.validUntil, yesterday)));
+  const quoted = db().select({ moveId: quotes.moveId }).from(quotes).where(and(eq(quotes.state, "given"), lte(quotes.goodUntil, yesterday)));
+  const rows = await db().select({ moveId: moves.id }).from(moves).where(and(eq(moves.state, "open"), or(inArray(moves.id, accepted), inArray(moves.id, quoted))));
   for (const { moveId } of rows) {
     await db().transaction(async (tx) => {
       await tx.select({ id: moves.id }).from(moves).where(eq(moves.id, moveId)).for("update");
@@ -174,6 +176,7 @@ export async function requireLeg(tx: Pick<Tx, "select">, moveId: string, legId: 
 export async function allowOnLeg(ctx: MoveWrite, action: Action, legId: string, given: Omit<EnteredFor, "carrierName"> | null) {
   const leg = await requireLeg(ctx.tx, ctx.move.id, legId);
   const enteredFor: EnteredFor | null = given ? { ...given, carrierName: leg.carrierName } : null;
+  if (enteredFor && enteredFor.heardOn > dayThere(ctx.at, leg.fromZone)) throw new AppError("bad_input", "Some entries need another look.", { fields: { "enteredFor.heardOn": ["This day has not come yet."] } });
   const carrierOnBoard = (await peopleIn(ctx.tx, ctx.move.id, { part: "carrier", legId })).length > 0;
   const held = ctx.allow({ action, legId, enteredFor, carrierOnBoard });
   return { leg, held, enteredFor };

@@ -7,6 +7,7 @@ import {
 import { requireMove } from "@/lib/access/scope";
 import { AppError } from "@/lib/errors";
 import type { Viewer } from "@/lib/viewer/types";
+import { dayThere } from "./day";
 import type { LegFacts, MoveFacts, PhaseFacts } from "./types";
 
 /** What a move has come to, for whoever may see it. Amounts are not among the facts. */
@@ -14,9 +15,6 @@ export async function getFacts(viewer: Viewer, moveId: string): Promise<MoveFact
   await requireMove(viewer, moveId);
   return unsafeGatherFacts(db(), moveId);
 }
-
-/** The calendar day at a place, as 2026-11-24. */
-const dayThere = (now: Date, zone: string) => new Intl.DateTimeFormat("en-CA", { timeZone: zone, year: "numeric", month: "2-digit", day: "2-digit" }).format(now);
 
 const ofMove = <T>(rows: T[], legId: string, key: (row: T) => string) => rows.filter((row) => key(row) === legId);
 
@@ -58,7 +56,7 @@ async function legFacts(reader: Reader, moveId: string, now: Date): Promise<LegF
   const found = await reader.select({ legId: findings.legId, state: findings.state, severity: findings.severity, n: count() }).from(findings)
     .where(eq(findings.moveId, moveId)).groupBy(findings.legId, findings.state, findings.severity);
   const accepted = await reader.select({ legId: acceptances.legId, number: acceptances.number, validUntil: acceptances.validUntil }).from(acceptances).where(and(eq(acceptances.moveId, moveId), isNull(acceptances.withdrawnAt)));
-  const asked = await reader.select({ legId: quotes.legId, state: quotes.state, waiting: sql<number>`(select count(*) from ${payments} where ${payments}.quote_id = ${quotes}.id and ${payments}.state in ('begun', 'open'))`.mapWith(Number) })
+  const asked = await reader.select({ legId: quotes.legId, state: quotes.state, goodUntil: quotes.goodUntil, waiting: sql<number>`(select count(*) from ${payments} where ${payments}.quote_id = ${quotes}.id and ${payments}.state in ('begun', 'open'))`.mapWith(Number) })
     .from(quotes).where(eq(quotes.moveId, moveId));
   const cleared = await reader.select({ legId: billingClearances.legId }).from(billingClearances).where(eq(billingClearances.moveId, moveId));
   const told = await reader.select({ legId: instructions.legId }).from(instructions).where(and(eq(instructions.moveId, moveId), isNull(instructions.withdrawnAt)));
@@ -87,6 +85,7 @@ async function legFacts(reader: Reader, moveId: string, now: Date): Promise<LegF
       acceptanceNumber: acceptance?.number ?? null,
       acceptanceLapsedOn: lapsed ? (acceptance?.validUntil ?? null) : null,
       quote,
+      quoteLapsed: quote === "given" && offers.every((row) => row.goodUntil !== null && row.goodUntil < dayThere(now, fromZone)),
       paymentOpen: offers.some((row) => row.waiting > 0),
       billingCleared: cleared.some((row) => row.legId === leg.legId),
       instructed: told.some((row) => row.legId === leg.legId),

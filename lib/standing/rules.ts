@@ -78,7 +78,7 @@ function legNeeds(move: MoveFacts, leg: LegFacts): WaitingOn | null {
   if (!leg.accepted) return ofCarrier(leg, "inspector", leg.visits === 0 ? "inspect" : "accept");
   if (!leg.billingCleared) {
     if (!leg.payerCompanyId) return owner("invite-payer");
-    if (leg.quote === "none") return ofCarrier(leg, "billing", "quote");
+    if (leg.quote === "none" || leg.quoteLapsed) return ofCarrier(leg, "billing", "quote");
     if (leg.quote === "given") return payer("agree");
     return leg.paymentOpen ? payer("confirm-payment") : payer("pay");
   }

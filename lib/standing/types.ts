@@ -28,6 +28,8 @@ export type LegFacts = {
   /** The last day of an acceptance that has run out before the carrier took the unit over. */
   acceptanceLapsedOn: string | null;
   quote: "none" | "given" | "agreed" | "paid";
+  /** A quote was given whose last day to agree has passed; only another one helps. */
+  quoteLapsed: boolean;
   paymentOpen: boolean;
   billingCleared: boolean;
   instructed: boolean;

@@ -1,7 +1,7 @@
 import "server-only";
 import { and, asc, eq, inArray, lte } from "drizzle-orm";
 import { db } from "@/db/client";
-import { payments, quotes } from "@/db/schema";
+import { moves, payments, quotes } from "@/db/schema";
 import { endCheckout, PaymentServiceError, readCheckout } from "@/lib/payments/stripe";
 import { isWaiting, type Checkout } from "../checkout";
 import { unsafeFindPage } from "./pages";
@@ -11,12 +11,12 @@ import { unsafeSettle } from "./settle";
 const ASK_AFTER_MS = 2 * 60_000;
 const AT_ONCE = 50;
 
-/** No viewer: the worker's own. Asks the payment service about one payment that still waits, books what it says, and ends a page whose time or quote is over. */
+/** No viewer: the worker's own. Asks the payment service about one payment that still waits, books what it says, and ends a page whose time, quote or move is over. */
 export async function unsafeCheckPayment(paymentId: string, now: Date): Promise<void> {
-  const [row] = await db().select({ payment: payments, quoteState: quotes.state }).from(payments).innerJoin(quotes, eq(quotes.id, payments.quoteId)).where(eq(payments.id, paymentId));
+  const [row] = await db().select({ payment: payments, quoteState: quotes.state, moveState: moves.state }).from(payments).innerJoin(quotes, eq(quotes.id, payments.quoteId)).innerJoin(moves, eq(moves.id, payments.moveId)).where(eq(payments.id, paymentId));
   if (!row || !isWaiting(row.payment.state)) return;
-  const { payment, quoteState } = row;
-  const over = quoteState !== "agreed" || (payment.expiresAt !== null && payment.expiresAt <= now);
+  const { payment, quoteState, moveState } = row;
+  const over = quoteState !== "agreed" || moveState !== "open" || (payment.expiresAt !== null && payment.expiresAt <= now);
   // Nobody was ever handed the address of a page that we never learned of, so nobody can pay on it.
   const page = payment.state === "begun" && over ? null : await pageNow(payment, over, now);
   if (page && !page.paid && page.status !== "expired" && !(page.status === "complete" && page.intentDead)) return;

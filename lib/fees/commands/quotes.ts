@@ -47,7 +47,10 @@ export async function agreeQuote(viewer: Viewer, input: QuoteStep, attempt: Atte
     ctx.allow({ action: "fee.agree", legId: quote.legId });
     const leg = await requireLeg(ctx.tx, ctx.move.id, quote.legId);
     refuse(denyAgree(quote, dayAt(ctx.at.toISOString(), leg.fromZone)));
-    await ctx.tx.update(quotes).set({ state: "agreed", agreedBy: viewer.userId, agreedAt: ctx.at, version: quote.version + 1 }).where(eq(quotes.id, quote.id));
+    const payerCompanyId = await seatedPayer(ctx, leg);
+    if (payerCompanyId === null) throw new AppError("not_yet", "Nobody is seated as the payer of this leg any more. The owner names and invites who pays, then this quote can be agreed to.");
+    // Until it is agreed another may take the payer's place; whoever pays then is who the receipt names.
+    await ctx.tx.update(quotes).set({ ...(payerCompanyId !== quote.payerCompanyId && { payerCompanyId }), state: "agreed", agreedBy: viewer.userId, agreedAt: ctx.at, version: quote.version + 1 }).where(eq(quotes.id, quote.id));
     await ctx.append({ kind: "quote.agreed", legId: leg.id, detail: { quoteId: quote.id, number: quote.number, carrier: leg.carrierName, totalCents: quote.totalCents } });
     return { quoteId: quote.id };
   });

@@ -6,7 +6,7 @@ import { agreeQuote, clearBilling, giveQuote, voidQuote } from "@/lib/fees/comma
 import { giveQuoteInput } from "@/lib/fees/input";
 import { getFees } from "@/lib/fees/queries";
 import { audienceOf, type RecordKind } from "@/lib/record/vocabulary";
-import { getFacts } from "@/lib/standing/queries";
+import { getFacts, unsafeGatherFacts } from "@/lib/standing/queries";
 import { withDatabase } from "../../support/database";
 import { anAttempt, seedMove } from "../../support/factories";
 import { aQuote } from "./bench";
@@ -73,6 +73,34 @@ it("a quote that lapsed is not agreed to", async () => {
   await expect(agreeQuote(move.payer, { moveId: move.moveId, quoteId }, later)).rejects.toMatchObject({ message: expect.stringContaining("good until 1 Jan 2099") });
   // Still the last day where the leg begins.
   await agreeQuote(move.payer, { moveId: move.moveId, quoteId }, anAttempt({ at: new Date("2099-01-02T05:00:00Z") }));
+});
+
+it("waits for another quote once the day to agree has passed, without anybody writing", async () => {
+  const move = await seedMove({ prepDone: true });
+  await giveQuote(move.clerkA, aQuote(move, { goodUntil: "2099-01-01" }), anAttempt());
+  const facts = await unsafeGatherFacts(db(), move.moveId, new Date("2099-01-02T18:00:00Z"));
+  expect(facts.legs[0]).toMatchObject({ quote: "given", quoteLapsed: true });
+  expect((await getFacts(move.owner, move.moveId)).legs[0]).toMatchObject({ quote: "given", quoteLapsed: false });
+});
+
+it("is agreed to by whoever has become the payer since, and by nobody while there is none", async () => {
+  const move = await seedMove();
+  const [legA] = move.legIds;
+  const own = move.owner.memberships[0]?.companyId ?? "";
+  const { quoteId } = await giveQuote(move.clerkA, aQuote(move), anAttempt());
+  await db().update(legs).set({ payerCompanyId: null }).where(eq(legs.id, legA));
+  await expect(agreeQuote(move.owner, { moveId: move.moveId, quoteId }, anAttempt())).rejects.toMatchObject({ code: "not_yet", message: expect.stringContaining("Nobody is seated as the payer") });
+  await db().update(legs).set({ payerCompanyId: own, payerName: "Vellum Ridge Heritage Line" }).where(eq(legs.id, legA));
+  await agreeQuote(move.owner, { moveId: move.moveId, quoteId }, anAttempt());
+  const [quote] = (await getFees(move.owner, move.moveId)).legs.map((leg) => leg.quote);
+  expect(quote).toMatchObject({ state: "agreed", payerName: "Vellum Ridge Heritage Line" });
+});
+
+it("what was heard of a carrier was not heard tomorrow", async () => {
+  const move = await seedMove();
+  await offBoard(move.moveId, move.legIds[0]);
+  const ahead = { ...HEARD, heardOn: "2099-01-01" };
+  await expect(giveQuote(move.owner, aQuote(move, { enteredFor: ahead }), anAttempt())).rejects.toMatchObject({ code: "bad_input", fields: { "enteredFor.heardOn": [expect.any(String)] } });
 });
 
 it("the owner enters a quote and a credit for a carrier that is not on board, and only then", async () => {

@@ -5,7 +5,7 @@ import type { LegFacts, MoveFacts } from "@/lib/standing/types";
 
 const aLeg = (seq: number, given: Partial<LegFacts> = {}): LegFacts => ({
   legId: `leg-${seq}`, seq, carrierName: `Carrier ${seq}`, carrierMark: null, carrierCompanyId: null, fromPlace: "Here", toPlace: "There", miles: null, payerName: "Payer", payerCompanyId: "com",
-  visits: 1, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0, accepted: true, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "paid", paymentOpen: false, billingCleared: true,
+  visits: 1, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0, accepted: true, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "paid", quoteLapsed: false, paymentOpen: false, billingCleared: true,
   instructed: true, released: seq === 1, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
 });
 

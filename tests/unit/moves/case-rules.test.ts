@@ -9,7 +9,7 @@ const held = (part: Part, legId: string | null = null): HeldPart => ({ part, leg
 
 const leg = (given: Partial<LegFacts> = {}): LegFacts => ({
   legId: "leg_1", seq: 1, carrierName: "Quillan & Sandbar", carrierMark: "ZQSR", carrierCompanyId: null, fromPlace: "Sand Hollow", toPlace: "Ardell", miles: 174, payerName: null, payerCompanyId: null,
-  visits: 0, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0, accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", paymentOpen: false, billingCleared: false,
+  visits: 0, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0, accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", quoteLapsed: false, paymentOpen: false, billingCleared: false,
   instructed: false, released: false, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
 });
 const move = (legs: LegFacts[]): MoveFacts => ({
@@ -40,7 +40,7 @@ describe("what one sees of the conditions", () => {
 });
 
 it("parts open only what they may see", () => {
-  expect(seenParts([held("payer", "leg_1")], [leg()])).toEqual({ prep: false, findings: false, fees: true, movement: true, timeline: true, unit: false });
+  expect(seenParts([held("payer", "leg_1")], [leg()])).toEqual({ prep: false, findings: false, fees: true, movement: false, timeline: true, unit: false });
   expect(seenParts([held("inspector", "leg_1")], [leg()])).toMatchObject({ prep: true, findings: true, fees: false, unit: true });
 });
 

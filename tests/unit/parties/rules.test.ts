@@ -6,7 +6,7 @@ import type { LegFacts } from "@/lib/standing/types";
 const none = { inspects: false, bills: false, dispatches: false };
 const leg = (given: Partial<LegFacts> = {}): LegFacts => ({
   legId: "leg_1", seq: 1, carrierName: "Quillan & Sandbar", carrierMark: "ZQSR", carrierCompanyId: "com_1", fromPlace: "Sand Hollow", toPlace: "Ardell", miles: null, payerName: null, payerCompanyId: null,
-  visits: 0, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0, accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", paymentOpen: false, billingCleared: false,
+  visits: 0, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0, accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", quoteLapsed: false, paymentOpen: false, billingCleared: false,
   instructed: false, released: false, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
 });
 

@@ -6,7 +6,7 @@ import type { WAITS } from "@/lib/standing/vocabulary";
 const aLeg = (given: Partial<LegFacts> = {}): LegFacts => ({
   legId: `leg${given.seq ?? 1}`, seq: 1, carrierName: `Carrier ${given.seq ?? 1}`, carrierMark: null, carrierCompanyId: "com", fromPlace: "Sand Hollow", toPlace: "Ardell", miles: null,
   payerName: "Fenn Valley Fund", payerCompanyId: "com-payer", visits: 0, findings: 0, openFindings: 0, answeredFindings: 0, stoppingOpen: 0, unansweredBeforePickup: 0,
-  accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", paymentOpen: false, billingCleared: false, instructed: false, released: false, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
+  accepted: false, acceptanceNumber: null, acceptanceLapsedOn: null, quote: "none", quoteLapsed: false, paymentOpen: false, billingCleared: false, instructed: false, released: false, takenOver: false, delivered: false, atDestination: false, placed: false, ...given,
 });
 const SIGNED = { total: 34, left: 0, signed: true };
 const aMove = (given: Partial<MoveFacts> = {}): MoveFacts => ({
@@ -33,6 +33,7 @@ it.each<[string, Partial<MoveFacts>, (typeof WAITS)[number], string]>([
   ["payer named, not on board", { legs: [aLeg({ accepted: true, payerCompanyId: null })] }, "invite-payer", "owner"],
   ["accepted, no price", { legs: [aLeg({ accepted: true })] }, "quote", "billing"],
   ["priced", { legs: [aLeg({ accepted: true, quote: "given" })] }, "agree", "payer"],
+  ["priced, and the day to agree has passed", { legs: [aLeg({ accepted: true, quote: "given", quoteLapsed: true })] }, "quote", "billing"],
   ["agreed", { legs: [aLeg({ accepted: true, quote: "agreed" })] }, "pay", "payer"],
   ["payment begun", { legs: [aLeg({ accepted: true, quote: "agreed", paymentOpen: true })] }, "confirm-payment", "payer"],
   ["billing cleared", { legs: [aLeg({ accepted: true, billingCleared: true })] }, "instruct", "desk"],
